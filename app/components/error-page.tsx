@@ -2,12 +2,18 @@ import { isRouteErrorResponse, Link } from "react-router";
 
 const words: Record<number, { title: string; text: string }> = {
   401: { title: "Sign in first", text: "This page belongs to a shop. Sign in and it opens where you left it." },
-  403: { title: "Not yours to do", text: "Your role in this shop does not cover that. An owner can do it, or change your role." },
+  403: {
+    title: "Not yours to do",
+    text: "Your role in this shop does not cover that. An owner can do it, or change your role.",
+  },
   404: {
     title: "Nothing on this arm",
     text: "There is no such page or record in this shop. The tag may be from another shop, or the address was cut short.",
   },
-  409: { title: "Somebody was quicker", text: "This record changed while you had it open. Go back and look at it again." },
+  409: {
+    title: "Somebody was quicker",
+    text: "This record changed while you had it open. Go back and look at it again.",
+  },
 };
 
 const broken = {
@@ -48,7 +54,18 @@ export function ErrorPage({ error }: { error: unknown }) {
 function BlankEnd() {
   return (
     <svg viewBox="0 0 240 44" className="w-60" aria-hidden="true">
-      <rect x="1" y="1" width="238" height="42" rx="2" fill="none" stroke="currentColor" strokeWidth="1.5" strokeDasharray="6 5" opacity="0.5" />
+      <rect
+        x="1"
+        y="1"
+        width="238"
+        height="42"
+        rx="2"
+        fill="none"
+        stroke="currentColor"
+        strokeWidth="1.5"
+        strokeDasharray="6 5"
+        opacity="0.5"
+      />
     </svg>
   );
 }

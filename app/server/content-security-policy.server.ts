@@ -1,11 +1,13 @@
+import type { Env } from "#app/services/env.server.ts";
+
 /**
  * The Content-Security-Policy of every answer, a directive a line with its reason.
  *
  * @param nonce of this answer; React Router puts it on each script and style.
  * @param settings where files are served from.
  */
-export function contentSecurityPolicy(nonce: string, settings: { S3_PUBLIC_ENDPOINT: string; NODE_ENV: string }): string {
-  const files = new URL(settings.S3_PUBLIC_ENDPOINT).origin;
+export function contentSecurityPolicy(nonce: string, settings: Pick<Env, "S3_BROWSER_ORIGIN" | "NODE_ENV">): string {
+  const files = settings.S3_BROWSER_ORIGIN;
   const development = settings.NODE_ENV === "development";
   const directives: Record<string, string> = {
     "default-src": "'self'",

@@ -48,6 +48,12 @@ export function isLockConflict(error: unknown): boolean {
   return losingErrors.has((error as { errno?: number } | null)?.errno ?? 0);
 }
 
+/** Was this row refused because a unique key, named, has such a row already? */
+export function isDuplicateKey(error: unknown, key: string): boolean {
+  const { errno, message } = (error ?? {}) as { errno?: number; message?: string };
+  return errno === 1062 && (message ?? "").includes(`'${key}'`);
+}
+
 /**
  * Runs work in one transaction, READ COMMITTED, and runs it again from the start when it lost to another: the one place that retries.
  * So work must have no effect outside the database. At READ COMMITTED a plain SELECT locks nothing and there are no gap locks:

@@ -25,6 +25,7 @@ export async function up(knex: Knex): Promise<void> {
       CONSTRAINT arms_bay FOREIGN KEY (bay_id) REFERENCES bays (id)
     ) ${options}`,
     // ring_* and moisture_* repeat what the newest readings say, so that a list of boards filters and draws from one table.
+    // claim_serial moves with every hold on the board: on a cluster of databases it makes two claims at once collide.
     `CREATE TABLE boards (
       ${id("id")} PRIMARY KEY,
       ${id("shop_id")},
@@ -61,6 +62,7 @@ export async function up(knex: Knex): Promise<void> {
       moisture_pct DECIMAL(4,1) NULL,
       moisture_at DATETIME(3) NULL,
       search_text VARCHAR(1000) NOT NULL DEFAULT '',
+      claim_serial INT UNSIGNED NOT NULL DEFAULT 0,
       version INT UNSIGNED NOT NULL DEFAULT 1,
       ${stamp("created_at")},
       deleted_at DATETIME(3) NULL,

@@ -1,42 +1,47 @@
-import { pathToFileURL } from "node:url";
+import { fileURLToPath } from "node:url";
 import knex from "knex";
-import { createConnection } from "mysql2/promise";
-import { knexConfig } from "#app/services/db.server.ts";
+import { type Connection, type ConnectionOptions, createConnection } from "mysql2/promise";
+import { type DbOptions, knexConfig } from "#app/services/db.server.ts";
+
+const folder = fileURLToPath(new URL("../db/migrations", import.meta.url));
 
 /**
- * Brings a database up to date, and creates it when the server has none of this name.
+ * Brings a database up to date, and creates it when the server has none of this name. Several processes may call it at once: they take turns.
  * Runs under tsx, as migrations are TypeScript.
  *
  * @returns how many migrations were needed.
  */
-export async function migrate(url: string): Promise<number> {
-  await createDatabase(url);
-  const folder = new URL("../db/migrations", import.meta.url).pathname;
-  const db = knex({ ...knexConfig(url, { poolMax: 1 }), migrations: { directory: folder, loadExtensions: [".ts"] } });
+export async function migrate(url: string, options: DbOptions = {}): Promise<number> {
+  const config = knexConfig(url, { ...options, poolMax: 1 });
+  const turn = await connect(config.connection as ConnectionOptions);
+  const db = knex({ ...config, migrations: { directory: folder, loadExtensions: [".ts"] } });
   try {
+    await turn.query("SELECT GET_LOCK('rayfleck_migrations', 300)");
     const [, done] = (await db.migrate.latest()) as [number, string[]];
     return done.length;
   } finally {
     await db.destroy();
+    await turn.end();
   }
 }
 
-async function createDatabase(url: string): Promise<void> {
-  const address = new URL(url);
-  const database = decodeURIComponent(address.pathname.slice(1));
-  address.pathname = "/";
-  const connection = await createConnection(address.href);
+const unknownDatabase = 1049;
+
+async function connect(options: ConnectionOptions): Promise<Connection> {
   try {
-    await connection.query("CREATE DATABASE IF NOT EXISTS ?? CHARACTER SET utf8mb4 COLLATE utf8mb4_unicode_ci", [
-      database,
-    ]);
-  } finally {
-    await connection.end();
+    return await createConnection(options);
+  } catch (error) {
+    if ((error as { errno?: number }).errno !== unknownDatabase) throw error;
   }
+  const connection = await createConnection({ ...options, database: undefined });
+  await connection.query("CREATE DATABASE IF NOT EXISTS ?? CHARACTER SET utf8mb4 COLLATE utf8mb4_unicode_ci", [
+    options.database,
+  ]);
+  return connection;
 }
 
-if (import.meta.url === pathToFileURL(process.argv[1] ?? "").href) {
+if (process.argv[1] === fileURLToPath(import.meta.url)) {
   const url = process.argv[2] ?? process.env.DATABASE_URL;
   if (!url) throw new Error("DATABASE_URL is not set");
-  console.log(`${await migrate(url)} migrations run`);
+  console.log(`${await migrate(url, { verifyTls: process.env.DATABASE_TLS === "verify" })} migrations run`);
 }

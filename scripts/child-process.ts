@@ -31,13 +31,3 @@ export async function endProcess(child: ChildProcess, patienceMs = 20_000): Prom
   if (!inTime) child.kill("SIGKILL");
   await ended;
 }
-
-/** Is there a process of this number? */
-export function isRunning(pid: number): boolean {
-  try {
-    process.kill(pid, 0);
-    return true;
-  } catch {
-    return false;
-  }
-}

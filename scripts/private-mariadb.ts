@@ -6,8 +6,9 @@ import path from "node:path";
 import { setTimeout as sleep } from "node:timers/promises";
 import { promisify } from "node:util";
 import { createConnection } from "mysql2/promise";
-import { endProcess, isRunning, spawnTied } from "./child-process.ts";
+import { endProcess, spawnTied } from "./child-process.ts";
 import { freePort } from "./free-port.ts";
+import { WantedError } from "./run-script.ts";
 
 export interface MariadbServer {
   /** The address of a database on this server. */
@@ -26,7 +27,7 @@ export interface PrivateMariadbOptions {
  * Starts a MariaDB of our own from Debian's package on a free loopback port, as root or as an ordinary user, and creates its system tables the first time.
  * It ends with this process, however that ends. Anybody on this machine can reach it: it is for demonstration, development and tests.
  *
- * @throws an error of one line when MariaDB is not installed or does not start.
+ * @throws WantedError when MariaDB is not installed, its folder is in use, or it does not start.
  */
 export async function startPrivateMariadb({
   folder,
@@ -35,7 +36,7 @@ export async function startPrivateMariadb({
   const dataFolder = path.resolve(folder);
   const program = findProgram("mariadbd");
   const pidFile = path.join(dataFolder, "mariadbd.pid");
-  await endForgotten(pidFile, dataFolder);
+  await untilNobodyUses(dataFolder, pidFile);
   if (!existsSync(path.join(dataFolder, "mysql"))) await installTables(dataFolder);
 
   const port = await freePort();
@@ -66,7 +67,7 @@ export async function startPrivateMariadb({
     await untilItAnswers(port, () => server.exitCode === null && server.signalCode === null);
   } catch (error) {
     await stop();
-    throw new Error(`MariaDB did not start (${await lastErrorLine(dataFolder)}).`, { cause: error });
+    throw new WantedError(`MariaDB did not start (${await lastErrorLine(dataFolder)}).`, { cause: error });
   }
   return { url: (database) => `mysql://root@127.0.0.1:${port}/${database}`, stop };
 }
@@ -75,7 +76,7 @@ export async function startPrivateMariadb({
 function findProgram(name: string): string {
   const folders = [...(process.env.PATH ?? "").split(":"), "/usr/sbin", "/usr/local/sbin"];
   const found = folders.map((folder) => path.join(folder, name)).find((file) => existsSync(file));
-  if (!found) throw new Error("MariaDB is not installed: apt-get install mariadb-server");
+  if (!found) throw new WantedError("MariaDB is not installed: apt-get install mariadb-server");
   return found;
 }
 
@@ -90,15 +91,21 @@ async function installTables(dataFolder: string): Promise<void> {
   ]);
 }
 
-/** Ends a server that still holds this folder because the process before us was killed. */
-async function endForgotten(pidFile: string, dataFolder: string): Promise<void> {
+/** A server whose starter was killed may need a moment to end. One that stays belongs to somebody. */
+async function untilNobodyUses(dataFolder: string, pidFile: string): Promise<void> {
   const pid = Number(await readFile(pidFile, "utf8").catch(() => ""));
-  if (!pid || !isRunning(pid)) return;
-  // The number may have gone to another program since.
-  const command = await readFile(`/proc/${pid}/cmdline`, "utf8").catch(() => "");
-  if (!command.includes(`--datadir=${dataFolder}\0`)) return;
-  process.kill(pid, "SIGTERM");
-  for (let waited = 0; isRunning(pid) && waited < 20_000; waited += 100) await sleep(100);
+  const isInUse = async () => {
+    // The number may have gone to another program since.
+    const command = await readFile(`/proc/${pid}/cmdline`, "utf8").catch(() => "");
+    return command.includes(`--datadir=${dataFolder}\0`);
+  };
+  for (let waitedMs = 0; await isInUse(); waitedMs += 100) {
+    if (waitedMs > 5_000)
+      throw new WantedError(
+        `The data in ${dataFolder} is in use by another start (database process ${pid}): stop that first.`,
+      );
+    await sleep(100);
+  }
 }
 
 async function untilItAnswers(port: number, isAlive: () => boolean): Promise<void> {

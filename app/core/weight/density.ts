@@ -7,6 +7,11 @@ const fibreSaturationPct = 30;
 /** Specific gravity of the wood substance that Eq. 4-3 uses. */
 const substance = 1.54;
 
+// Above this Eq. 4-12 gives more than 24 % and a density that falls as water is added, which no wood's does (seen with
+// lignumvitae): our own limit.
+const densestEstimated = 0.9;
+const tooDense = "The shrinkage of so dense a wood is a poor estimate; expect a tenth either way.";
+
 /** Volume shrinkage from green to `moisturePct`, percent of green: Wood Handbook (2021) Eq. 4-9. Zero from 30 % up. */
 export function volumeShrinkagePct(greenToOvendryPct: number, moisturePct: number): number {
   requireWithin("Volumetric shrinkage", greenToOvendryPct, 0, 40, "%");
@@ -40,6 +45,7 @@ export interface Density {
   densityKgM3: number;
   /** True where the volumetric shrinkage is not published and was estimated (Eq. 4-12). */
   isShrinkageEstimated: boolean;
+  outsideRange: string | null;
 }
 
 /**
@@ -56,6 +62,7 @@ export function densityOf(species: Species, moisturePct: number): Density | null
   return {
     densityKgM3: 1000 * gravityAt(basic, shrinkagePct, moisturePct) * (1 + moisturePct / 100),
     isShrinkageEstimated: published === null,
+    outsideRange: published === null && basic > densestEstimated ? tooDense : null,
   };
 }
 

@@ -1,7 +1,6 @@
 import { createDb } from "#app/services/db.server.ts";
 import type { Env } from "#app/services/env.server.ts";
 import { createStorage } from "#app/services/storage.server.ts";
-import { loadDemo } from "#db/seeds/demo/load-demo.ts";
 
 /** Somebody to sign in as. */
 export interface DemoPerson {
@@ -23,6 +22,8 @@ export async function loadDemoIfEmpty(env: Env, say: (line: string) => void): Pr
   try {
     if (!(await db("people").first("id"))) {
       say("Loading the demonstration shop…");
+      // Only the first start needs what it takes to draw the pictures.
+      const { loadDemo } = await import("#db/seeds/demo/load-demo.ts");
       await loadDemo(db, storage);
     }
     const members: DemoPerson[] = await db("memberships")

@@ -22,6 +22,8 @@ const say = (line: string) => console.log(line);
 
 /** Starts everything the shop needs, says where it is, and runs until Ctrl-C or SIGTERM; then ends all that it started and this process. */
 export async function runShop(run: ShopRun): Promise<never> {
+  // The pinned S3 client is the last that runs on Node 20, and would say so at every start.
+  process.env.AWS_SDK_JS_NODE_VERSION_SUPPORT_WARNING_DISABLED = "true";
   const asked = new AbortController();
   const askedToStop = new Promise<void>((resolve) => asked.signal.addEventListener("abort", () => resolve()));
   for (const name of ["SIGINT", "SIGTERM", "SIGHUP"]) process.on(name, () => asked.abort());

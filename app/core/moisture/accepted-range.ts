@@ -10,7 +10,7 @@ export function requireWithin(what: string, value: number, low: number, high: nu
 }
 
 /** Moisture that any wood can hold, percent of its ovendry mass. Balsa-like woods soak up several times their own mass. */
-export const moistureLimitPct = 600;
+const moistureLimitPct = 600;
 
 /** A moisture content in percent, refused with a RangeError unless 0 to 600. */
 export function requireMoisture(what: string, moisturePct: number): number {

@@ -4,7 +4,7 @@ import { requireSize, requireWithin } from "./accepted-range.ts";
  * Days for 1 in lumber to air-dry to 20 % in the United States, by species code: from good weather and siting to poor.
  * USDA air-drying handbooks, Air Drying of Lumber FPL-GTR-117 [memory].
  */
-export const airDryingDaysForOneInch: Readonly<Record<string, readonly [number, number]>> = {
+const airDryingDaysForOneInch: Readonly<Record<string, readonly [number, number]>> = {
   "red-maple": [30, 120],
   "silver-maple": [30, 120],
   "yellow-poplar": [40, 150],

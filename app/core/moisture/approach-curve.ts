@@ -1,5 +1,5 @@
 /** Slowest and fastest approach considered, as days to close half the gap: 12/4 in the open air to veneer indoors. */
-export const halfLifeDays = { shortest: 1, longest: 400 };
+const halfLifeDays = { shortest: 1, longest: 400 };
 
 /** One curve M(t) = equilibrium + gap x exp(-rate x t), in percent and days. */
 export interface Curve {

@@ -13,7 +13,10 @@ export const requestLog: MiddlewareFunction<Response> = async ({ request, contex
   context.set(logContext, requestLog);
   const began = performance.now();
   const response = await next();
-  requestLog.info({ method: request.method, route: pattern, status: response.status, ms: Math.round(performance.now() - began) }, "request");
+  requestLog.info(
+    { method: request.method, route: pattern, status: response.status, ms: Math.round(performance.now() - began) },
+    "request",
+  );
   return response;
 };
 
@@ -37,4 +40,3 @@ export const securityHeaders: MiddlewareFunction<Response> = async ({ context },
   if (env().PUBLIC_URL.startsWith("https:")) headers.set("Strict-Transport-Security", "max-age=31536000");
   return response;
 };
-

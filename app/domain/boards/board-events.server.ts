@@ -1,7 +1,7 @@
 import type { Knex } from "knex";
 import type { Actor } from "#app/domain/shop/actor.ts";
 import { newId } from "#app/services/ids.server.ts";
-import type { BoardEventKind, EventDetail } from "./board-history.ts";
+import type { BoardEvent, BoardEventKind, EventDetail } from "./board-history.ts";
 
 /**
  * Writes one line of a board's history, in the transaction of the change itself. Nothing ever edits it: triggers refuse.
@@ -37,15 +37,6 @@ export async function writeEvents(
     })),
     500,
   );
-}
-
-/** One line of history as the page shows it. */
-export interface BoardEvent {
-  id: string;
-  kind: BoardEventKind;
-  detail: EventDetail;
-  byName: string | null;
-  at: Date;
 }
 
 /** A board's history, newest first. */

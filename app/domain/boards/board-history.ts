@@ -25,6 +25,15 @@ export type BoardEventKind = keyof typeof kinds;
 /** Plain facts of an event: field changes as [before, after], or named values. */
 export type EventDetail = Record<string, string | number | null | [string | number | null, string | number | null]>;
 
+/** One line of history as the page shows it. */
+export interface BoardEvent {
+  id: string;
+  kind: BoardEventKind;
+  detail: EventDetail;
+  byName: string | null;
+  at: Date;
+}
+
 /** The heading of a history line. */
 export function eventTitle(kind: BoardEventKind): string {
   return kinds[kind];

@@ -41,6 +41,7 @@ export interface HoldMark {
   toMm: number;
   state: "held" | "out";
   placedBy: string;
+  placedById: string;
   expiresAt: Date;
 }
 

@@ -171,6 +171,7 @@ export async function holdMarks(
       toMm: "h.to_mm",
       state: "h.state",
       placedBy: "who.name",
+      placedById: "who.id",
       expiresAt: "h.expires_at",
     });
   for (const { boardId, ...mark } of rows) marks.set(boardId, [...(marks.get(boardId) ?? []), mark]);
@@ -274,4 +275,30 @@ export async function listSimilar(
     .limit(limit)
     .select(summaryColumns);
   return rows.map((row: SummaryRow) => toSummary(row, []));
+}
+
+/** Boards on which a project holds something now, in tag order. */
+export async function listHeldFor(db: Knex, actor: Pick<Actor, "shopId">, projectId: string): Promise<BoardSummary[]> {
+  const ids: { board_id: string }[] = await liveHolds(db, actor)
+    .where("h.project_id", projectId)
+    .distinct("h.board_id");
+  return listByIds(
+    db,
+    actor,
+    ids.map((row) => row.board_id),
+  );
+}
+
+/** What boards cost, in minor units, where it is known. For those who may see it: the caller has asked. */
+export async function boardCosts(
+  db: Knex,
+  actor: Pick<Actor, "shopId">,
+  boardIds: string[],
+): Promise<Map<string, number>> {
+  if (boardIds.length === 0) return new Map();
+  const rows = await boardsOf(db, actor)
+    .whereIn("b.id", boardIds)
+    .whereNotNull("b.cost_minor")
+    .select("b.id", "b.cost_minor");
+  return new Map(rows.map((row: { id: string; cost_minor: number }) => [row.id, row.cost_minor]));
 }

@@ -2,6 +2,7 @@ import { Outlet } from "react-router";
 import { ErrorPage } from "#app/components/error-page.tsx";
 import { ShopHeader } from "#app/components/shop-header.tsx";
 import { can } from "#app/domain/shop/permissions.ts";
+import { ShopViewProvider } from "#app/domain/shop/shop-view.tsx";
 import { requireAtWork } from "#app/server/at-work.server.ts";
 import { atWorkContext } from "#app/server/context.server.ts";
 import type { Route } from "./+types/layout.ts";
@@ -13,14 +14,20 @@ export function loader({ context }: Route.LoaderArgs) {
   return {
     personName: actor.personName,
     role: actor.role,
-    shop: { name: shop.name, units: shop.units, currency: shop.currency, classLimits: shop.classLimits },
+    shop: {
+      name: shop.name,
+      units: shop.units,
+      currency: shop.currency,
+      classLimits: shop.classLimits,
+      role: actor.role,
+    },
   };
 }
 
 export default function ShopLayout({ loaderData }: Route.ComponentProps) {
   const { shop, personName, role } = loaderData;
   return (
-    <>
+    <ShopViewProvider value={shop}>
       <ShopHeader
         shopName={shop.name}
         personName={personName}
@@ -34,7 +41,7 @@ export default function ShopLayout({ loaderData }: Route.ComponentProps) {
       <main id="content" className="page">
         <Outlet />
       </main>
-    </>
+    </ShopViewProvider>
   );
 }
 

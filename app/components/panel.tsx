@@ -1,0 +1,28 @@
+import type { ReactNode } from "react";
+import { Link } from "react-router";
+
+interface PanelProps {
+  title: string;
+  /** Where "Close" leads: the page underneath. */
+  closeTo: string;
+  children: ReactNode;
+}
+
+/** A form opened inside a page, where the thing it changes stands. It has an address of its own, so it works without JavaScript and survives a reload. */
+export function Panel({ title, closeTo, children }: PanelProps) {
+  return (
+    <section aria-label={title} className="my-4 rounded-xl border-2 border-action bg-surface p-4 sm:p-5">
+      <header className="mb-3 flex items-center justify-between gap-4">
+        <h2 className="text-xl">{title}</h2>
+        <Link
+          to={closeTo}
+          preventScrollReset
+          className="inline-flex min-h-11 items-center rounded-lg px-3 font-semibold text-link underline-offset-4 hover:underline"
+        >
+          Close
+        </Link>
+      </header>
+      {children}
+    </section>
+  );
+}

@@ -1,0 +1,43 @@
+import { z } from "zod";
+import { isSpeciesCode } from "#app/core/species/species.ts";
+import { moneyField } from "#app/domain/shop/money.ts";
+import { dryings, priceBases } from "./delivery.ts";
+
+const words = (max: number) => z.string().trim().max(max, `At most ${max} characters.`).default("");
+
+/** A delivery as typed from the supplier's papers. The supplier is one of the shop's, or a new name. */
+export function deliveryForm(shop: { currency: string }) {
+  return z
+    .object({
+      supplierId: z.string().max(13).default(""),
+      newSupplier: words(120),
+      receivedOn: z
+        .string({ error: "When did it come?" })
+        .regex(/^\d{4}-\d{2}-\d{2}$/, "Write the date as year-month-day.")
+        .refine((day) => !Number.isNaN(Date.parse(day)), "There is no such day."),
+      reference: words(80),
+      species: z.string({ error: "Choose the species." }).refine(isSpeciesCode, "Choose the species."),
+      quarters: z.coerce.number({ error: "Choose the quarters." }).int().min(1).max(64),
+      drying: z.enum(dryings).default("kiln"),
+      grade: words(40),
+      claimedVolume: z.coerce
+        .number({ error: "A number, such as 212 or 0.5." })
+        .positive("More than nothing.")
+        .max(1_000_000, "That cannot be.")
+        .nullable()
+        .default(null),
+      claimedUnit: z.enum(["bf", "m3"]).default("bf"),
+      priceMinor: moneyField(shop.currency),
+      priceBasis: z.enum(priceBases).default("bf"),
+      freightMinor: moneyField(shop.currency).transform((minor) => minor ?? 0),
+      origin: words(120),
+      certificate: words(120),
+      notes: words(4000),
+    })
+    .refine((form) => form.supplierId !== "" || form.newSupplier !== "", {
+      path: ["newSupplier"],
+      error: "Choose the supplier, or name a new one.",
+    });
+}
+
+export type DeliveryForm = z.infer<ReturnType<typeof deliveryForm>>;

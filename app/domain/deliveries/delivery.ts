@@ -1,0 +1,44 @@
+export const dryings = ["kiln", "air", "green"] as const;
+export type Drying = (typeof dryings)[number];
+
+export const priceBases = ["bf", "m3", "lump"] as const;
+export type PriceBasis = (typeof priceBases)[number];
+
+export type VolumeUnit = "bf" | "m3";
+
+/** A delivery as the supplier claims it and the shop received it. Its boards are a lot. */
+export interface Delivery {
+  id: string;
+  supplierId: string;
+  supplierName: string;
+  /** YYYY-MM-DD. */
+  receivedOn: string;
+  reference: string;
+  species: string;
+  quarters: number;
+  drying: Drying;
+  grade: string;
+  claimedVolume: number | null;
+  claimedUnit: VolumeUnit;
+  priceMinor: number | null;
+  priceBasis: PriceBasis;
+  freightMinor: number;
+  origin: string;
+  certificate: string;
+  notes: string;
+  talliedAt: Date | null;
+  version: number;
+}
+
+export interface DeliverySummary extends Delivery {
+  boards: number;
+}
+
+export interface DeliveryDocument {
+  id: string;
+  name: string;
+  contentType: string;
+  bytes: number;
+  addedBy: string;
+  addedAt: Date;
+}

@@ -1,0 +1,131 @@
+import type { Knex } from "knex";
+import type { Actor } from "#app/domain/shop/actor.ts";
+import type { Photo, PhotoKind, PhotoSize } from "./photo.ts";
+
+type ByShop = Pick<Actor, "shopId">;
+
+export interface WaitingPhoto {
+  id: string;
+  boardId: string;
+  kind: PhotoKind;
+  uploadKey: string;
+}
+
+/** A board's photos, ends first, newest first within a kind. */
+export async function listPhotos(db: Knex, actor: ByShop, boardId: string): Promise<Photo[]> {
+  return db("photos as f")
+    .join("people as p", "p.id", "f.added_by")
+    .where({ "f.shop_id": actor.shopId, "f.board_id": boardId, "f.state": "ready" })
+    .orderByRaw("FIELD(f.kind, 'near end', 'far end', 'heart face', 'bark face', 'edge'), f.created_at DESC")
+    .select({
+      id: "f.id",
+      kind: "f.kind",
+      widthPx: "f.width_px",
+      heightPx: "f.height_px",
+      generated: "f.generated",
+      addedBy: "p.name",
+      addedAt: "f.created_at",
+    });
+}
+
+/** One photo that has been taken in, with its board, or null. */
+export async function getPhoto(
+  db: Knex,
+  actor: ByShop,
+  photoId: string,
+): Promise<(Photo & { boardId: string }) | null> {
+  const row = await db("photos as f")
+    .join("people as p", "p.id", "f.added_by")
+    .where({ "f.id": photoId, "f.shop_id": actor.shopId, "f.state": "ready" })
+    .first({
+      id: "f.id",
+      boardId: "f.board_id",
+      kind: "f.kind",
+      widthPx: "f.width_px",
+      heightPx: "f.height_px",
+      generated: "f.generated",
+      addedBy: "p.name",
+      addedAt: "f.created_at",
+    });
+  return row ?? null;
+}
+
+/** Where one size of a photo is kept, or null. */
+export async function photoKey(db: Knex, actor: ByShop, photoId: string, size: PhotoSize): Promise<string | null> {
+  const row = await db("photos")
+    .where({ id: photoId, shop_id: actor.shopId, state: "ready" })
+    .first("original_key", "screen_key", "small_key");
+  if (!row) return null;
+  return size === "original" ? row.original_key : size === "screen" ? row.screen_key : row.small_key;
+}
+
+export async function insertWaitingPhoto(db: Knex, actor: Actor, photo: WaitingPhoto): Promise<void> {
+  await db("photos").insert({
+    id: photo.id,
+    shop_id: actor.shopId,
+    board_id: photo.boardId,
+    kind: photo.kind,
+    original_key: photo.uploadKey,
+    added_by: actor.personId,
+  });
+}
+
+/** A photo announced and not yet confirmed, or null. */
+export async function getWaitingPhoto(db: Knex, actor: ByShop, photoId: string): Promise<WaitingPhoto | null> {
+  const row = await db("photos")
+    .where({ id: photoId, shop_id: actor.shopId, state: "waiting" })
+    .first({ id: "id", boardId: "board_id", kind: "kind", uploadKey: "original_key" });
+  return row ?? null;
+}
+
+/** Announced long ago and never confirmed: their files, if any, are to be swept. */
+export async function listStaleWaiting(db: Knex, actor: ByShop, before: Date, limit: number): Promise<WaitingPhoto[]> {
+  return db("photos")
+    .where({ shop_id: actor.shopId, state: "waiting" })
+    .where("created_at", "<", before)
+    .limit(limit)
+    .select({ id: "id", boardId: "board_id", kind: "kind", uploadKey: "original_key" });
+}
+
+export interface ReadyPhoto {
+  originalKey: string;
+  screenKey: string;
+  smallKey: string;
+  contentType: string;
+  bytes: number;
+  widthPx: number;
+  heightPx: number;
+}
+
+/** Marks a waiting photo as taken in; false when somebody else already did. */
+export async function markReady(db: Knex, actor: ByShop, photoId: string, ready: ReadyPhoto): Promise<boolean> {
+  const changed = await db("photos").where({ id: photoId, shop_id: actor.shopId, state: "waiting" }).update({
+    state: "ready",
+    original_key: ready.originalKey,
+    screen_key: ready.screenKey,
+    small_key: ready.smallKey,
+    content_type: ready.contentType,
+    bytes: ready.bytes,
+    width_px: ready.widthPx,
+    height_px: ready.heightPx,
+  });
+  return changed === 1;
+}
+
+export async function deleteWaiting(db: Knex, actor: ByShop, photoId: string): Promise<void> {
+  await db("photos").where({ id: photoId, shop_id: actor.shopId, state: "waiting" }).delete();
+}
+
+/** Takes a photo's row away and says which files it had; null when it is not in this shop. Readings made from it keep what they read. */
+export async function deletePhotoRow(
+  trx: Knex,
+  actor: ByShop,
+  photoId: string,
+): Promise<{ boardId: string; kind: PhotoKind; keys: string[] } | null> {
+  const at = { id: photoId, shop_id: actor.shopId, state: "ready" };
+  const row = await trx("photos").where(at).first("board_id", "kind", "original_key", "screen_key", "small_key");
+  if (!row) return null;
+  await trx("ring_readings").where({ photo_id: photoId, shop_id: actor.shopId }).update({ photo_id: null });
+  await trx("photos").where(at).delete();
+  return { boardId: row.board_id, kind: row.kind, keys: [row.original_key, row.screen_key, row.small_key] };
+}

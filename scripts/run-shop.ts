@@ -1,11 +1,10 @@
-import type { ChildProcess } from "node:child_process";
-import { setTimeout as sleep } from "node:timers/promises";
 import type { Env } from "#app/services/env.server.ts";
 import { endProcess, spawnTied } from "./child-process.ts";
 import { loadDemoIfEmpty } from "./demo.ts";
 import { migrate } from "./migrate.ts";
-import { explain, WantedError } from "./run-script.ts";
+import { explain } from "./run-script.ts";
 import { startSurroundings } from "./surroundings.ts";
+import { untilItAnswers, webProcessEnded } from "./web-process.ts";
 import { welcome } from "./welcome.ts";
 
 /** How one way of running the shop differs from another. */
@@ -17,7 +16,6 @@ export interface ShopRun {
   webProcess: (env: Env) => string[];
 }
 
-const dataFolder = ".data";
 const say = (line: string) => console.log(line);
 
 /** Starts everything the shop needs, says where it is, and runs until Ctrl-C or SIGTERM; then ends all that it started and this process. */
@@ -45,7 +43,7 @@ export async function runShop(run: ShopRun): Promise<never> {
 
 /** Ends only by an error: the shop runs until somebody stops it. */
 async function open(run: ShopRun, started: (() => Promise<void>)[], signal: AbortSignal): Promise<never> {
-  const { settings, env, ownsDatabase, inboxUrl, stop } = await startSurroundings(dataFolder, {
+  const { settings, env, ownsDatabase, inboxUrl, stop } = await startSurroundings({
     ...process.env,
     NODE_ENV: run.mode,
   });
@@ -65,19 +63,5 @@ async function open(run: ShopRun, started: (() => Promise<void>)[], signal: Abor
   await untilItAnswers(web, env);
   say(welcome({ address: env.PUBLIC_URL, people, inboxUrl }));
   await new Promise((resolve) => web.once("exit", resolve));
-  throw ended(web);
-}
-
-async function untilItAnswers(web: ChildProcess, { HOST, PORT }: Env): Promise<void> {
-  const host = HOST === "0.0.0.0" || HOST === "::" ? "127.0.0.1" : HOST;
-  while (web.exitCode === null && web.signalCode === null) {
-    const answer = await fetch(`http://${host}:${PORT}/icon.svg`).catch(() => null);
-    if (answer?.ok) return;
-    await sleep(100);
-  }
-  throw ended(web);
-}
-
-function ended(web: ChildProcess): WantedError {
-  return new WantedError(`The web process ended by itself (${web.signalCode ?? `code ${web.exitCode}`}).`);
+  throw webProcessEnded(web);
 }

@@ -39,12 +39,12 @@ const services = {
 };
 
 /**
- * Starts a private MariaDB, an S3 fake and a mail fake in a folder: each only where the settings name no real one.
+ * Starts a private MariaDB, an S3 fake and a mail fake, with their data in DATA_FOLDER: each only where the settings name no real one.
  *
  * @param given settings, usually process.env.
  * @throws SettingsError or WantedError, before anything starts, when those that are given are wrong or incomplete, or the shop's port is taken.
  */
-export async function startSurroundings(folder: string, given: Given): Promise<Surroundings> {
+export async function startSurroundings(given: Given): Promise<Surroundings> {
   const missing = Object.entries(services).filter(([, service]) => !service.isGiven(given));
   const ours = new Set(missing.map(([name]) => name));
   const standIns: Settings = Object.assign({}, ...missing.map(([, service]) => service.standIns));
@@ -52,6 +52,7 @@ export async function startSurroundings(folder: string, given: Given): Promise<S
   if (!(await isPortFree(wanted.PORT, wanted.HOST)))
     throw new WantedError(`Port ${wanted.PORT} is in use: choose another with PORT.`);
 
+  const folder = wanted.DATA_FOLDER;
   await mkdir(folder, { recursive: true });
   const running: { stop(): Promise<void> }[] = [];
   const stop = async () => {

@@ -24,6 +24,10 @@ const settings = z
     PUBLIC_URL: webAddress.optional(),
     /** How many proxies stand in front and add themselves to X-Forwarded-For. */
     TRUST_PROXY: count.min(0).max(10).default(0),
+    /** How many processes answer on this machine. */
+    WEB_PROCESSES: count.min(1).max(64).default(1),
+    /** Where services that were started for want of real ones keep their data. */
+    DATA_FOLDER: z.string().default(".data"),
     LOG_LEVEL: z.enum(["silent", "fatal", "error", "warn", "info", "debug", "trace"]).default("info"),
 
     DATABASE_URL: z.url({

@@ -1,12 +1,12 @@
 import { randomBytes } from "node:crypto";
-import { mkdir, writeFile } from "node:fs/promises";
+import { mkdir, rename, writeFile } from "node:fs/promises";
 import { createServer } from "node:http";
 import type { AddressInfo, Server } from "node:net";
 import path from "node:path";
 import { text } from "node:stream/consumers";
 import { SMTPServer } from "smtp-server";
 import { inboxPage } from "./inbox-page.ts";
-import { listLetters } from "./letters.ts";
+import { letterName, listLetters } from "./letters.ts";
 
 export interface FakeMail {
   /** The settings that lead to it. */
@@ -34,8 +34,10 @@ export async function startFakeMail({
     disabledCommands: ["AUTH", "STARTTLS"],
     async onData(stream, _session, done) {
       try {
-        const name = `${new Date().toISOString().replaceAll(":", "-")}-${randomBytes(3).toString("hex")}.eml`;
-        await writeFile(path.join(folder, name), await text(stream));
+        const name = letterName(new Date(), randomBytes(3).toString("hex"));
+        // Under another name until it is whole: somebody may be looking.
+        await writeFile(path.join(folder, `${name}.part`), await text(stream));
+        await rename(path.join(folder, `${name}.part`), path.join(folder, name));
         done();
       } catch (error) {
         done(error as Error);
@@ -43,7 +45,7 @@ export async function startFakeMail({
     },
   });
   const inbox = createServer(async (_request, response) => {
-    const page = inboxPage(await listLetters(folder));
+    const page = inboxPage(await listLetters(folder, { atMost: 50 }));
     response.writeHead(200, {
       "Content-Type": "text/html; charset=utf-8",
       "Content-Security-Policy": "default-src 'none'; style-src 'unsafe-inline'",

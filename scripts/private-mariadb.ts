@@ -1,6 +1,6 @@
 import { execFile } from "node:child_process";
 import { existsSync } from "node:fs";
-import { mkdir, mkdtemp, readFile, rm } from "node:fs/promises";
+import { mkdir, mkdtemp, readFile, rename, rm } from "node:fs/promises";
 import { tmpdir } from "node:os";
 import path from "node:path";
 import { setTimeout as sleep } from "node:timers/promises";
@@ -37,7 +37,7 @@ export async function startPrivateMariadb({
   const program = findProgram("mariadbd");
   const pidFile = path.join(dataFolder, "mariadbd.pid");
   await untilNobodyUses(dataFolder, pidFile);
-  if (!existsSync(path.join(dataFolder, "mysql"))) await installTables(dataFolder);
+  if (!existsSync(dataFolder)) await installTables(dataFolder);
 
   const port = await freePort();
   // A socket's path may have 107 characters at most, so it cannot lie in just any folder.
@@ -80,15 +80,19 @@ function findProgram(name: string): string {
   return found;
 }
 
+/** Makes the system tables beside the folder and moves them there whole, so that nobody finds them half made. */
 async function installTables(dataFolder: string): Promise<void> {
-  await mkdir(dataFolder, { recursive: true });
+  const unfinished = `${dataFolder}.unfinished`;
+  await rm(unfinished, { recursive: true, force: true });
+  await mkdir(unfinished, { recursive: true });
   await promisify(execFile)(findProgram("mariadb-install-db"), [
     "--no-defaults",
-    `--datadir=${dataFolder}`,
+    `--datadir=${unfinished}`,
     "--auth-root-authentication-method=normal",
     "--skip-test-db",
     ...(asRoot() ? ["--user=root"] : []),
   ]);
+  await rename(unfinished, dataFolder);
 }
 
 /** A server whose starter was killed may need a moment to end. One that stays belongs to somebody. */

@@ -53,7 +53,8 @@ export async function startSurroundings(given: Given): Promise<Surroundings> {
     throw new WantedError(`Port ${wanted.PORT} is in use: choose another with PORT.`);
 
   const folder = wanted.DATA_FOLDER;
-  await mkdir(folder, { recursive: true });
+  // Letters with sign-in codes lie in it.
+  await mkdir(folder, { recursive: true, mode: 0o700 });
   const running: { stop(): Promise<void> }[] = [];
   const stop = async () => {
     await Promise.all(running.splice(0).map((one) => one.stop()));

@@ -36,9 +36,10 @@ async function build(): Promise<Counts> {
   }
 }
 
-async function unitAndDatabase(): Promise<Counts> {
-  const file = path.join(reports, "vitest.json");
-  const code = await run(bin("vitest"), ["run", "--reporter=dot", "--reporter=json", `--outputFile.json=${file}`]);
+async function vitest(project: string): Promise<Counts> {
+  const file = path.join(reports, `vitest-${project}.json`);
+  const args = ["run", `--project=${project}`, "--reporter=dot", "--reporter=json", `--outputFile.json=${file}`];
+  const code = await run(bin("vitest"), args);
   const written = await report(file);
   return countRun(code, written && countVitest(written));
 }
@@ -57,7 +58,8 @@ const steps: [name: string, step: () => Promise<Counts>][] = [
   ["imports", () => check(process.execPath, ["--import", "tsx", "scripts/check-imports.ts"])],
   ["route types", () => check(bin("react-router"), ["typegen"])],
   ["types", () => check(bin("tsc"), [])],
-  ["unit and database tests", unitAndDatabase],
+  ["unit tests", () => vitest("!db")],
+  ["database tests", () => vitest("db")],
   ["build", build],
   ["browser tests", browser],
 ];

@@ -1,5 +1,6 @@
 import { MariaDbContainer } from "@testcontainers/mariadb";
 import type { MariadbServer } from "#scripts/private-mariadb.ts";
+import { WantedError } from "#scripts/run-script.ts";
 
 /** The version of Debian 12's package. */
 const image = "mariadb:10.11";
@@ -7,7 +8,7 @@ const image = "mariadb:10.11";
 /**
  * Starts MariaDB in a container.
  *
- * @throws an error of one line when no container engine runs.
+ * @throws WantedError when no container engine runs.
  */
 export async function startContainerMariadb(): Promise<MariadbServer> {
   try {
@@ -17,6 +18,6 @@ export async function startContainerMariadb(): Promise<MariadbServer> {
       stop: async () => void (await container.stop()),
     };
   } catch (error) {
-    throw new Error(`TEST_DATABASE=container needs a running container engine: ${(error as Error).message}`);
+    throw new WantedError(`TEST_DATABASE=container needs a running container engine: ${(error as Error).message}`);
   }
 }

@@ -31,7 +31,7 @@ function readLength(
   { name, leastMm = 0.1, mostMm = 20_000 }: LengthOptions,
   context: z.RefinementCtx,
 ): number | undefined {
-  const parsed = parseLength(typed, unit);
+  const parsed = parseLength(typed, unit, { zero: leastMm === 0 });
   if (parsed.ok && parsed.mm >= leastMm && parsed.mm <= mostMm) return parsed.mm;
   context.addIssue({ code: "custom", message: parsed.ok ? `That cannot be the ${name} here.` : parsed.why });
   return undefined;

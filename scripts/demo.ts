@@ -24,7 +24,8 @@ export async function loadDemoIfEmpty(env: Env, say: (line: string) => void): Pr
       say("Loading the demonstration shop…");
       // Only the first start needs what it takes to draw the pictures.
       const { loadDemo } = await import("#db/seeds/demo/load-demo.ts");
-      await loadDemo(db, storage);
+      // Whole or not at all, or the next start would find half a shop.
+      await db.transaction((trx) => loadDemo(trx, storage));
     }
     const members: DemoPerson[] = await db("memberships")
       .join("people", "people.id", "memberships.person_id")

@@ -16,24 +16,48 @@ export type GeneratedTruth = {
 
 /** Mean rings per inch that each kind is drawn with: usual figures for sawn stock, from memory of the trade, no table. */
 const USUAL_RINGS_PER_INCH: Record<WoodKindName, [number, number]> = {
-  softwood: [5, 14], oak: [7, 14], ash: [6, 12], maple: [10, 18], cherry: [8, 14], walnut: [5, 11],
+  softwood: [5, 14],
+  oak: [7, 14],
+  ash: [6, 12],
+  maple: [10, 18],
+  cherry: [8, 14],
+  walnut: [5, 11],
 };
 
 /** The marks each test group carries, for a picture of the given height. */
 const MARK_GROUPS: Record<string, (height: number, random: () => number) => Marks> = {
   clean: () => ({ noise: 3 }),
-  saw: (height, random) => ({ noise: 3, saw: { angleDeg: 90 * random() + 20, pitchPx: height * (0.06 + 0.08 * random()), depth: 16 } }),
-  wax: (_height, random) => ({ noise: 3, coat: { colour: [235, 232, 222], cover: 0.55, opacity: 0.6, brushDeg: 180 * random() } }),
-  paint: (_height, random) => ({ noise: 3, coat: { colour: [40, 90, 60], cover: 0.4, opacity: 1, brushDeg: 180 * random() } }),
+  saw: (height, random) => ({
+    noise: 3,
+    saw: { angleDeg: 90 * random() + 20, pitchPx: height * (0.06 + 0.08 * random()), depth: 16 },
+  }),
+  wax: (_height, random) => ({
+    noise: 3,
+    coat: { colour: [235, 232, 222], cover: 0.55, opacity: 0.6, brushDeg: 180 * random() },
+  }),
+  paint: (_height, random) => ({
+    noise: 3,
+    coat: { colour: [40, 90, 60], cover: 0.4, opacity: 1, brushDeg: 180 * random() },
+  }),
   pencil: (height) => ({ noise: 3, strokes: { count: 4, widthPx: Math.max(1.5, height / 60), colour: [70, 70, 74] } }),
   crayon: (height) => ({ noise: 3, strokes: { count: 3, widthPx: height / 12, colour: [30, 70, 170] } }),
-  shadow: (height, random) => ({ noise: 4, shadow: { angleDeg: 40 + 100 * random(), at: 0.3 + 0.4 * random(), brightness: 0.35, softPx: height / 15 } }),
+  shadow: (height, random) => ({
+    noise: 4,
+    shadow: { angleDeg: 40 + 100 * random(), at: 0.3 + 0.4 * random(), brightness: 0.35, softPx: height / 15 },
+  }),
   blur: (height) => ({ noise: 3, blurPx: height / 90 }),
-  checks: (height, random) => ({ noise: 3, checks: { count: 5, from: { x: random() * 3 * height, y: 2 * height }, widthPx: height / 40 } }),
+  checks: (height, random) => ({
+    noise: 3,
+    checks: { count: 5, from: { x: random() * 3 * height, y: 2 * height }, widthPx: height / 40 },
+  }),
 };
 
 /** A set of ends drawn from a seed: every kind under every group of marks, `each` of them, piths all round. */
-export function generatedSet(each: number, seed: number, kinds: readonly WoodKindName[] = ["softwood", "oak", "ash", "maple", "cherry", "walnut"]): GeneratedEnd[] {
+export function generatedSet(
+  each: number,
+  seed: number,
+  kinds: readonly WoodKindName[] = ["softwood", "oak", "ash", "maple", "cherry", "walnut"],
+): GeneratedEnd[] {
   const random = randomStream(seed);
   const ends: GeneratedEnd[] = [];
   for (const kind of kinds) {
@@ -45,13 +69,23 @@ export function generatedSet(each: number, seed: number, kinds: readonly WoodKin
         const bearing = 2 * Math.PI * random();
         const [few, many] = USUAL_RINGS_PER_INCH[kind];
         const spec: EndSpec = {
-          widthMm, thicknessMm, kind,
-          pith: { xMm: widthMm / 2 + distance * Math.cos(bearing), yMm: thicknessMm / 2 + distance * Math.sin(bearing) },
+          widthMm,
+          thicknessMm,
+          kind,
+          pith: {
+            xMm: widthMm / 2 + distance * Math.cos(bearing),
+            yMm: thicknessMm / 2 + distance * Math.sin(bearing),
+          },
           ringsPerInch: few + (many - few) * random(),
           seed: Math.floor(random() * 1e9),
           pxPerMm: 5 + 3 * random(),
         };
-        ends.push({ name: `${kind}-${group}-${i + 1}`, group, spec, marks: marksFor(thicknessMm * spec.pxPerMm, random) });
+        ends.push({
+          name: `${kind}-${group}-${i + 1}`,
+          group,
+          spec,
+          marks: marksFor(thicknessMm * spec.pxPerMm, random),
+        });
       }
     }
   }

@@ -69,7 +69,9 @@ function addChecks(picture: RgbPicture, checks: NonNullable<Marks["checks"]>, se
       const dy = y - checks.from.y;
       const along = dx * Math.cos(ray.bearing) + dy * Math.sin(ray.bearing) - ray.begins;
       if (along < 0 || along > ray.length) continue;
-      const away = Math.abs(dy * Math.cos(ray.bearing) - dx * Math.sin(ray.bearing)) + 1.5 * (smoothNoise(along / 9, 0, seed) - 0.5);
+      const away =
+        Math.abs(dy * Math.cos(ray.bearing) - dx * Math.sin(ray.bearing)) +
+        1.5 * (smoothNoise(along / 9, 0, seed) - 0.5);
       const taper = checks.widthPx * (1 - along / ray.length);
       shade = Math.min(shade, 0.2 + 0.8 * Math.max(0, Math.min(1, away - taper / 2 + 0.5)));
     }
@@ -131,7 +133,10 @@ function blurRgb(picture: RgbPicture, sigmaPx: number): RgbPicture {
   let data = Float32Array.from(picture.data);
   const { width, height } = picture;
   for (let pass = 0; pass < 3; pass++) {
-    for (const [stepX, stepY] of [[1, 0], [0, 1]] as const) {
+    for (const [stepX, stepY] of [
+      [1, 0],
+      [0, 1],
+    ] as const) {
       const next = new Float32Array(data.length);
       for (let y = 0; y < height; y++) {
         for (let x = 0; x < width; x++) {

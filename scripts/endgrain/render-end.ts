@@ -22,11 +22,19 @@ export type RgbPicture = { width: number; height: number; data: Uint8Array };
 
 /** The tree of a spec: rings reach past the end's furthest corner. */
 export function treeOf(spec: EndSpec): RingTree {
-  const reachMm = 1.2 * Math.hypot(
-    Math.max(Math.abs(spec.pith.xMm), Math.abs(spec.widthMm - spec.pith.xMm)),
-    Math.max(Math.abs(spec.pith.yMm), Math.abs(spec.thicknessMm - spec.pith.yMm)),
-  );
-  return growTree({ ringsPerInch: spec.ringsPerInch, reachMm, spread: WOOD_KINDS[spec.kind].ringSpread, roundness: spec.roundness ?? 1, seed: spec.seed });
+  const reachMm =
+    1.2 *
+    Math.hypot(
+      Math.max(Math.abs(spec.pith.xMm), Math.abs(spec.widthMm - spec.pith.xMm)),
+      Math.max(Math.abs(spec.pith.yMm), Math.abs(spec.thicknessMm - spec.pith.yMm)),
+    );
+  return growTree({
+    ringsPerInch: spec.ringsPerInch,
+    reachMm,
+    spread: WOOD_KINDS[spec.kind].ringSpread,
+    roundness: spec.roundness ?? 1,
+    seed: spec.seed,
+  });
 }
 
 /** Draws the end straight on, filling the picture, in even light: wood only. @returns raw RGB, widthMm·pxPerMm wide. */
@@ -56,7 +64,13 @@ export function renderEnd(spec: EndSpec): RgbPicture {
 }
 
 /** Ground (0 earlywood .. 1 latewood, may pass either), pore darkness 0..1 and ray brightness −1..1 at a place relative to the pith. */
-function woodShade(kind: WoodKind, tree: RingTree, spec: EndSpec, xMm: number, yMm: number): { late: number; pore: number; ray: number } {
+function woodShade(
+  kind: WoodKind,
+  tree: RingTree,
+  spec: EndSpec,
+  xMm: number,
+  yMm: number,
+): { late: number; pore: number; ray: number } {
   const radius = evenRadius(tree, xMm, yMm);
   const bearing = Math.atan2(yMm, xMm);
   const { ring, through, widthMm } = ringAt(tree, radius);
@@ -75,7 +89,14 @@ function woodShade(kind: WoodKind, tree: RingTree, spec: EndSpec, xMm: number, y
   return { late, pore, ray: rayShade(kind.rays, radius, bearing, pixelMm, spec.seed) };
 }
 
-function poreShade(pores: NonNullable<WoodKind["pores"]>, radius: number, bearing: number, through: number, pixelMm: number, seed: number): number {
+function poreShade(
+  pores: NonNullable<WoodKind["pores"]>,
+  radius: number,
+  bearing: number,
+  through: number,
+  pixelMm: number,
+  seed: number,
+): number {
   const early = through < pores.band;
   const poreMm = early ? pores.earlyMm : pores.lateMm;
   const fill = early ? pores.earlyFill : pores.lateFill;

@@ -1,4 +1,4 @@
-import { randomStream, normal } from "#scripts/endgrain/random.ts";
+import { normal, randomStream } from "#scripts/endgrain/random.ts";
 
 /** A stem seen from its end: where its rings close and how far they are from round. Lengths in millimetres. */
 export type RingTree = {
@@ -13,7 +13,13 @@ export type RingTree = {
  * departure carries over to the next, as good and bad years do); `roundness` 0 is a perfect circle, 1 an ordinary stem: up to
  * about 4 % oval and 1–2 % lobed (chosen by eye on the development photographs).
  */
-export function growTree(options: { ringsPerInch: number; reachMm: number; spread: number; roundness: number; seed: number }): RingTree {
+export function growTree(options: {
+  ringsPerInch: number;
+  reachMm: number;
+  spread: number;
+  roundness: number;
+  seed: number;
+}): RingTree {
   const random = randomStream(options.seed);
   const meanMm = 25.4 / options.ringsPerInch;
   const ends: number[] = [];

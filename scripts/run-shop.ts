@@ -43,11 +43,10 @@ export async function runShop(run: ShopRun): Promise<never> {
 
 /** Ends only by an error: the shop runs until somebody stops it. */
 async function open(run: ShopRun, started: (() => Promise<void>)[], signal: AbortSignal): Promise<never> {
-  const { settings, env, ownsDatabase, inboxUrl, stop } = await startSurroundings({
-    ...process.env,
-    NODE_ENV: run.mode,
-  });
-  started.push(stop);
+  const starting = startSurroundings({ ...process.env, NODE_ENV: run.mode });
+  // Also when somebody stops us before they have come up.
+  started.push(async () => (await starting.catch(() => null))?.stop());
+  const { settings, env, ownsDatabase, inboxUrl } = await starting;
   signal.throwIfAborted();
   await run.prepare?.(say, signal);
   signal.throwIfAborted();

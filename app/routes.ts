@@ -19,6 +19,7 @@ export default [
       route(":boardId/photos/:photoId/remove", "routes/boards/remove-photo.ts"),
     ]),
     route("holds/:holdId", "routes/holds/hold.ts"),
+    route("scan", "routes/scan/scan.tsx"),
     route("tags", "routes/tags/tags.tsx"),
     ...prefix("projects", [
       index("routes/projects/list.tsx"),

@@ -8,10 +8,17 @@ interface PanelProps {
   children: ReactNode;
 }
 
+/** The part of an address that brings an opened panel into view. */
+export const toPanel = "#panel";
+
 /** A form opened inside a page, where the thing it changes stands. It has an address of its own, so it works without JavaScript and survives a reload. */
 export function Panel({ title, closeTo, children }: PanelProps) {
   return (
-    <section aria-label={title} className="my-4 rounded-xl border-2 border-action bg-surface p-4 sm:p-5">
+    <section
+      id="panel"
+      aria-label={title}
+      className="my-4 scroll-mt-4 rounded-xl border-2 border-action bg-surface p-4 sm:p-5"
+    >
       <header className="mb-3 flex items-center justify-between gap-4">
         <h2 className="text-xl">{title}</h2>
         <Link

@@ -19,15 +19,15 @@ export function ShopHeader({ shopName, personName, role, sees }: ShopHeaderProps
       >
         Skip to the page
       </a>
-      <div className="mx-auto flex max-w-[84rem] flex-wrap items-center gap-x-4 gap-y-2 px-4 py-2.5">
-        <Link to="/rack" className="flex items-center gap-2.5 font-bold font-display text-xl text-bar-ink no-underline">
+      <div className="mx-auto flex max-w-[84rem] flex-wrap items-center gap-x-2 gap-y-2 px-4 sm:gap-x-4 py-2.5">
+        <Link to="/rack" className="flex items-center gap-2 font-bold font-display text-xl text-bar-ink no-underline">
           <img src="/icon.svg" alt="" className="h-8 w-8" />
           Rayfleck
         </Link>
-        <div className="order-2 ml-auto flex items-center gap-2 md:order-3">
+        <div className="order-2 ml-auto flex items-center gap-1.5 md:order-3">
           <Link
             to="/scan"
-            className="inline-flex min-h-11 items-center rounded-full border border-bar-soft px-4 font-semibold text-bar-ink no-underline hover:bg-bar-chosen"
+            className="inline-flex min-h-11 items-center rounded-full border border-bar-soft px-3.5 font-semibold text-bar-ink no-underline hover:bg-bar-chosen"
           >
             Scan
           </Link>
@@ -75,7 +75,7 @@ const item =
 function PersonMenu({ shopName, personName, role, sees }: ShopHeaderProps) {
   return (
     <MenuTrigger>
-      <AriaButton className="inline-flex min-h-11 max-w-44 items-center rounded-full bg-bar-chosen px-4 text-bar-ink">
+      <AriaButton className="inline-flex min-h-11 max-w-28 items-center sm:max-w-48 rounded-full bg-bar-chosen px-4 text-bar-ink">
         <span className="truncate">{shopName}</span>
       </AriaButton>
       <Popover placement="bottom end" className="min-w-60 rounded-xl border border-line bg-surface p-2 shadow-lg">

@@ -29,10 +29,10 @@ export function BoardEnd({ board, heightPx, fill }: BoardEndProps) {
       <EndDrawing board={board} width={width} height={height} />
       {board.holds?.[0] ? (
         <path
-          d={crayonWave(width * 0.06, width * 0.94, height / 2, height * 0.16)}
+          d={crayonWave(width * 0.06, width * (fill ? 0.4 : 0.94), height / 2, height * 0.16)}
           fill="none"
           stroke={crayonInk[board.holds[0].crayon]}
-          strokeWidth={height * 0.16}
+          strokeWidth={height * (fill ? 0.1 : 0.16)}
           strokeLinecap="round"
         />
       ) : null}

@@ -1,6 +1,7 @@
 import { href, Link } from "react-router";
 import { Card } from "#app/components/card.tsx";
 import { Facts } from "#app/components/facts.tsx";
+import { toPanel } from "#app/components/panel.tsx";
 import { printDay } from "#app/components/when.tsx";
 import { printQuarters } from "#app/core/lengths/quarters.ts";
 import { printMoney } from "#app/domain/shop/money.ts";
@@ -85,10 +86,9 @@ function Origin({ board }: { board: Board }) {
 function CorrectLink({ board, group, title }: { board: Board; group: CorrectionGroup; title: string }) {
   return (
     <Link
-      to={href("/boards/:boardId/correct/:group", { boardId: board.id, group })}
+      to={href("/boards/:boardId/correct/:group", { boardId: board.id, group }) + toPanel}
       className="inline-flex min-h-11 items-center text-link underline-offset-4 hover:underline"
       aria-label={`Correct ${title.toLowerCase()}`}
-      preventScrollReset
     >
       Correct
     </Link>

@@ -1,3 +1,6 @@
+import type { LengthUnit } from "#app/core/lengths/length-unit.ts";
+import { printLength } from "#app/core/lengths/print-length.ts";
+
 /** What can happen to a board, each with the words its history shows. */
 const kinds = {
   received: "Received",
@@ -39,14 +42,22 @@ export function eventTitle(kind: BoardEventKind): string {
   return kinds[kind];
 }
 
-/** What changed, in words: "width 210 → 205", or named values side by side. */
-export function eventWords(detail: EventDetail): string {
+/** Keys of lengths say so, as they are kept in millimetres and shown in the shop's units. */
+const inMillimetres = " (mm)";
+
+/** What changed, in words: "width 8 1/4 in → 8 in", or named values side by side. */
+export function eventWords(detail: EventDetail, units: LengthUnit): string {
   return Object.entries(detail)
     .filter(([, value]) => value !== null && value !== "")
-    .map(([name, value]) => {
-      if (!Array.isArray(value)) return name === "note" ? `“${value}”` : `${name} ${value}`;
-      const [before, after] = value.map((side) => (side === null || side === "" ? "none" : String(side)));
-      return `${name} ${before} → ${after}`;
+    .map(([key, value]) => {
+      const isLength = key.endsWith(inMillimetres);
+      const name = isLength ? key.slice(0, -inMillimetres.length) : key;
+      const print = (side: string | number | null) => {
+        if (side === null || side === "") return "none";
+        return isLength && typeof side === "number" ? `${printLength(side, units)} ${units}` : String(side);
+      };
+      if (Array.isArray(value)) return `${name} ${print(value[0])} → ${print(value[1])}`;
+      return name === "note" ? `“${value}”` : `${name} ${print(value)}`;
     })
     .join(", ");
 }

@@ -1,6 +1,7 @@
 import { Form, href, Link } from "react-router";
 import { Button } from "#app/components/button.tsx";
 import { Card } from "#app/components/card.tsx";
+import { toPanel } from "#app/components/panel.tsx";
 import { speciesTints } from "#app/domain/species/species-tints.ts";
 import type { Board } from "./board.ts";
 import type { Defect } from "./defect.ts";
@@ -16,8 +17,7 @@ interface DefectListProps {
 export function DefectList({ board, defects, mayNote }: DefectListProps) {
   const note = mayNote ? (
     <Link
-      to={href("/boards/:boardId/defects", { boardId: board.id })}
-      preventScrollReset
+      to={href("/boards/:boardId/defects", { boardId: board.id }) + toPanel}
       className="inline-flex min-h-11 items-center text-link underline-offset-4 hover:underline"
     >
       Note a defect

@@ -15,6 +15,8 @@ interface EndDrawingProps {
   /** In the units of whatever it is drawn in: pixels on a page, millimetres on the rack. */
   width: number;
   height: number;
+  /** Screen pixels to one of those units, roughly: rings are thinned so that they never run together. */
+  pxPerUnit?: number;
   /** True where the words stand beside it already. */
   decorative?: boolean;
   className?: string;
@@ -24,11 +26,10 @@ interface EndDrawingProps {
  * The board's end grain as its sign: width by thickness to proportion, rings as its reading says, in the tint of its species. Without a reading it is
  * blank and dashed: grain is never invented. The one drawing used at every size, from a list row to the rack.
  */
-export function EndDrawing({ board, x, y, width, height, decorative, className }: EndDrawingProps) {
+export function EndDrawing({ board, x, y, width, height, pxPerUnit = 1, decorative, className }: EndDrawingProps) {
   const clip = useId();
   const tints = speciesTints(board.species);
-  const thin = Math.max(0.7, Math.min(2.2, height / 34));
-  const words = decorative ? { "aria-hidden": true as const } : { role: "img", "aria-label": endWords(board) };
+  const line = Math.max(1.1, Math.min(2.4, (height * pxPerUnit) / 26)) / pxPerUnit;
   return (
     <svg
       x={x}
@@ -38,7 +39,8 @@ export function EndDrawing({ board, x, y, width, height, decorative, className }
       viewBox={`0 0 ${width} ${height}`}
       className={className}
       overflow="hidden"
-      {...words}
+      role={decorative ? "presentation" : "img"}
+      aria-label={decorative ? undefined : endWords(board)}
     >
       {board.rings ? (
         <>
@@ -48,10 +50,10 @@ export function EndDrawing({ board, x, y, width, height, decorative, className }
           <g clipPath={`url(#${clip})`}>
             <rect width={width} height={height} fill={tints.base} />
             <path
-              d={ringPath(board.rings, { widthPx: width, heightPx: height })}
+              d={ringPath(board.rings, { widthPx: width, heightPx: height, minSpacingPx: line * 2.9 })}
               fill="none"
               stroke={tints.latewood}
-              strokeWidth={thin}
+              strokeWidth={line}
             />
           </g>
           <rect

@@ -1,24 +1,23 @@
-import { printLength } from "#app/core/lengths/print-length.ts";
+import { lengthParts } from "#app/core/lengths/print-length.ts";
 import { printQuarters } from "#app/core/lengths/quarters.ts";
 import { useShop } from "#app/domain/shop/shop-view.tsx";
 
 /** One length in the shop's units. A fraction is set as one, and still copies and reads aloud as "8 1/4". */
 export function LengthText({ mm, unit = true }: { mm: number; unit?: boolean }) {
   const { units } = useShop();
-  const printed = printLength(mm, units);
-  const [, whole, top, bottom] = /^(?:(\d+) )?(\d+)\/(\d+)$/.exec(printed) ?? [];
+  const { sign, whole, numerator, denominator } = lengthParts(mm, units);
   return (
     <span className="whitespace-nowrap tabular-nums">
-      {top === undefined ? (
-        printed
-      ) : (
+      {sign}
+      {whole > 0 || numerator === 0 ? whole : null}
+      {numerator > 0 ? (
         <>
-          {whole === undefined ? null : `${whole} `}
+          {whole > 0 ? " " : null}
           <span className="fraction">
-            <span>{top}</span>/<span>{bottom}</span>
+            <span>{numerator}</span>/<span>{denominator}</span>
           </span>
         </>
-      )}
+      ) : null}
       {unit ? ` ${units}` : ""}
     </span>
   );

@@ -1,6 +1,7 @@
 import { Form, href, Link } from "react-router";
 import { Button } from "#app/components/button.tsx";
 import { Card } from "#app/components/card.tsx";
+import { toPanel } from "#app/components/panel.tsx";
 import { LengthText } from "#app/domain/boards/size-text.tsx";
 import { speciesName } from "#app/domain/species/species-tints.ts";
 import type { Part } from "./project.ts";
@@ -15,8 +16,7 @@ interface PartsTableProps {
 export function PartsTable({ parts, projectId, mayChange }: PartsTableProps) {
   const add = mayChange ? (
     <Link
-      to={href("/projects/:projectId/parts", { projectId })}
-      preventScrollReset
+      to={href("/projects/:projectId/parts", { projectId }) + toPanel}
       className="inline-flex min-h-11 items-center text-link underline-offset-4 hover:underline"
     >
       Add a part

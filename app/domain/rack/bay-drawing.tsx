@@ -23,6 +23,8 @@ const post = 26;
 const armThickness = 26;
 const labelBelow = 44;
 const headroom = 70;
+/** About how large a millimetre is on a desk's screen. */
+const pxPerMm = 0.55;
 
 /** One bay as one stands before it: the post, its arms, boards end on and to scale, stickers between layers. A unit is a millimetre. */
 export function BayDrawing({ bay, boardsByArm, loadByArm, chosen, faint, linkTo }: BayDrawingProps) {
@@ -91,6 +93,7 @@ export function BayDrawing({ bay, boardsByArm, loadByArm, chosen, faint, linkTo 
                     y={boardTop}
                     width={board.widthMm}
                     height={board.thicknessMm}
+                    pxPerUnit={pxPerMm}
                     decorative
                   />
                   {board.holds[0] ? (

@@ -1,6 +1,7 @@
 import { Form, href, Outlet } from "react-router";
 import { Button, ButtonLink } from "#app/components/button.tsx";
 import { Card } from "#app/components/card.tsx";
+import { toPanel } from "#app/components/panel.tsx";
 import { Availability } from "#app/domain/boards/availability.tsx";
 import { listEvents } from "#app/domain/boards/board-events.server.ts";
 import { BoardFacts } from "#app/domain/boards/board-facts.tsx";
@@ -63,7 +64,7 @@ export default function BoardPage({ loaderData }: Route.ComponentProps) {
           <DefectList board={board} defects={defects} mayNote={can(role, "board:correct")} />
           <BoardHistory events={events} />
         </div>
-        <div className="grid gap-4 lg:sticky lg:top-4">
+        <div className="contents gap-4 lg:sticky lg:top-4 lg:grid">
           <BoardFacts board={board} role={role} />
           <div className="flex flex-wrap gap-2">
             {can(role, "tag:print") ? (
@@ -102,15 +103,11 @@ function BoardActions({ board, mayReserve }: BoardActionsProps) {
         </ButtonLink>
       ) : null}
       <div className="grid grid-cols-3 gap-2 md:flex">
-        <ButtonLink to={href("/boards/:boardId/moisture", at)} preventScrollReset>
-          Moisture
-        </ButtonLink>
-        <ButtonLink to={href("/boards/:boardId/move", at)} preventScrollReset>
-          Move
-        </ButtonLink>
+        <ButtonLink to={href("/boards/:boardId/moisture", at) + toPanel}>Moisture</ButtonLink>
+        <ButtonLink to={href("/boards/:boardId/move", at) + toPanel}>Move</ButtonLink>
         {racked || board.state === "out" ? (
           <Form method="post" action={href("/boards/:boardId/state", at)} className="grid">
-            <Button name="intent" value={racked ? "take down" : "put back"}>
+            <Button className="whitespace-nowrap px-2" name="intent" value={racked ? "take down" : "put back"}>
               {racked ? "Take down" : "Put back"}
             </Button>
           </Form>

@@ -33,7 +33,7 @@ export default function Rack({ loaderData }: Route.ComponentProps) {
   const [params] = useSearchParams();
   const chosen = boards.find((board) => board.id === params.get("board")) ?? null;
   const filter = readRackFilter(params);
-  const byArm = Map.groupBy(boards, (board: BoardSummary) => board.armId ?? "");
+  const byArm = groupByArm(boards);
   const loads = armLoads(bays, byArm);
   const total = boards.reduce((sum, board) => sum + boardMeasure(board), 0);
   const projects = new Map(boards.flatMap((board) => board.holds).map((hold) => [hold.projectId, hold]));
@@ -80,7 +80,7 @@ export default function Rack({ loaderData }: Route.ComponentProps) {
           <div className="grid gap-4">
             <RackFilter filter={filter} projects={[...projects.values()]} />
             <Card>
-              <div className="grid gap-x-6 gap-y-8 sm:grid-cols-2 xl:grid-cols-3">
+              <div className="grid grid-cols-[repeat(auto-fit,minmax(min(100%,17rem),1fr))] gap-x-6 gap-y-8">
                 {bays.map((bay) => (
                   <section key={bay.id}>
                     <h2 className="mb-2 flex items-baseline gap-3 text-lg">
@@ -112,4 +112,13 @@ export default function Rack({ loaderData }: Route.ComponentProps) {
       )}
     </>
   );
+}
+
+function groupByArm(boards: BoardSummary[]): Map<string, BoardSummary[]> {
+  const byArm = new Map<string, BoardSummary[]>();
+  for (const board of boards) {
+    const key = board.armId ?? "";
+    byArm.set(key, [...(byArm.get(key) ?? []), board]);
+  }
+  return byArm;
 }

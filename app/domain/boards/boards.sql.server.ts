@@ -70,14 +70,15 @@ function liveHolds(db: Knex, actor: Pick<Actor, "shopId">): Knex.QueryBuilder {
     );
 }
 
-/** Every word must begin some word of the board's text, or its tag; a bare number is a tag number. */
+/** Every word must begin some word of the board's text; a bare number is a tag number, and what looks like a tag is one, or its beginning. */
 function searchWords(query: Knex.QueryBuilder, typed: string): void {
   if (/^\d{1,9}$/.test(typed)) {
     query.where("b.tag_number", Number(typed));
     return;
   }
-  if (/^[a-z]{1,4}-?\d{1,9}$/i.test(typed)) {
-    query.where("b.tag_number", Number(typed.replace(/\D/g, "")));
+  const tag = /^([a-z]{1,3})-?(\d{1,9})$/i.exec(typed);
+  if (tag) {
+    query.where("b.tag", "like", `${tag[1]}-${tag[2]}%`);
     return;
   }
   const words = typed.match(/[\p{L}\p{N}]+/gu) ?? [];

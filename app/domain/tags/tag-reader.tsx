@@ -30,7 +30,10 @@ export function TagReader({ onRead }: { onRead: (text: string) => boolean }) {
       // Only a page that scans carries the reader.
       const { default: jsQR } = await import("jsqr");
       stream = await navigator.mediaDevices.getUserMedia({ video: { facingMode: "environment" } });
-      if (ended || !video.current) return stream.getTracks().forEach((track) => track.stop());
+      if (ended || !video.current) {
+        for (const track of stream.getTracks()) track.stop();
+        return;
+      }
       video.current.srcObject = stream;
       await video.current.play();
       look(jsQR);

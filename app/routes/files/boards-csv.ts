@@ -66,7 +66,7 @@ function line(board: BoardSummary, size: (mm: number | null) => number | null): 
     size(board.widthMm),
     size(board.widthFarMm),
     size(board.lengthMm),
-    boardMeasure(board),
+    round(boardMeasure(board), 2),
     board.state,
     board.place,
     board.ringClass,

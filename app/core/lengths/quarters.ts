@@ -12,9 +12,13 @@ export function printQuarters(quarters: number): string {
  * @throws RangeError unless above 0 and at most 40 quarters (10 in).
  */
 export function nominalThicknessMm(quarters: number): number {
-  if (!(quarters > 0 && quarters <= 40))
-    throw new RangeError(`Quarters must be a number above 0 and at most 40; got ${quarters}.`);
-  return exactMm((quarters / 4) * mmPerInch);
+  return exactMm((requireQuarters(quarters) / 4) * mmPerInch);
+}
+
+/** Quarters above 0 and at most 40, refused with a RangeError otherwise. */
+export function requireQuarters(quarters: number): number {
+  if (quarters > 0 && quarters <= 40) return quarters;
+  throw new RangeError(`Quarters must be a number above 0 and at most 40; got ${quarters}.`);
 }
 
 /**

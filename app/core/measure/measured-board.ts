@@ -1,4 +1,4 @@
-import { nominalThicknessMm } from "#app/core/lengths/quarters.ts";
+import { requireQuarters } from "#app/core/lengths/quarters.ts";
 import { requireSize } from "#app/core/moisture/accepted-range.ts";
 
 /** What a measure needs to know of a board. */
@@ -31,5 +31,5 @@ export function tallyWidthMm({ widthMm, widthFarMm }: Pick<MeasuredBoard, "width
  * Hardwood-handbook glossary; Griffith, Advanced Projects in Woodwork (1912), "sold by surface measure" [confirmed].
  */
 export function countedThicknessIn(quarters: number): number {
-  return Math.max(25.4, nominalThicknessMm(quarters)) / 25.4;
+  return Math.max(4, requireQuarters(quarters)) / 4;
 }

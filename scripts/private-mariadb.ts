@@ -1,7 +1,6 @@
 import { execFile } from "node:child_process";
 import { existsSync } from "node:fs";
-import { mkdir, mkdtemp, readFile, rename, rm } from "node:fs/promises";
-import { tmpdir } from "node:os";
+import { mkdir, readFile, rename, rm } from "node:fs/promises";
 import path from "node:path";
 import { setTimeout as sleep } from "node:timers/promises";
 import { promisify } from "node:util";
@@ -40,12 +39,11 @@ export async function startPrivateMariadb({
   if (!existsSync(dataFolder)) await installTables(dataFolder);
 
   const port = await freePort();
-  // A socket's path may have 107 characters at most, so it cannot lie in just any folder.
-  const socketFolder = await mkdtemp(path.join(tmpdir(), "mariadb-"));
   const server = spawnTied(program, [
     "--no-defaults",
     `--datadir=${dataFolder}`,
-    `--socket=${path.join(socketFolder, "s")}`,
+    // Within its data folder, where it works: a whole path may be longer than the 107 characters that a socket's may have.
+    "--socket=mariadbd.sock",
     `--port=${port}`,
     "--bind-address=127.0.0.1",
     `--pid-file=${pidFile}`,
@@ -59,10 +57,7 @@ export async function startPrivateMariadb({
       ? ["--innodb-flush-log-at-trx-commit=0", "--innodb-doublewrite=0", "--innodb-flush-method=nosync"]
       : []),
   ]);
-  const stop = async () => {
-    await endProcess(server);
-    await rm(socketFolder, { recursive: true, force: true });
-  };
+  const stop = () => endProcess(server);
   try {
     await untilItAnswers(port, () => server.exitCode === null && server.signalCode === null);
   } catch (error) {

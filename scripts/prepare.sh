@@ -25,7 +25,7 @@ need_package() {
   fi
   command -v apt-get >/dev/null || fail "The program $1 is missing (Debian's package $2), and there is no apt-get to install it."
   echo "Installing $2…"
-  mkdir -p .data
+  mkdir -p -m 700 .data
   {
     "${as_root[@]}" apt-get update -qq &&
       "${as_root[@]}" env DEBIAN_FRONTEND=noninteractive apt-get install -y -qq --no-install-recommends "$2"
@@ -35,6 +35,6 @@ need_package() {
 need_npm_packages() {
   node scripts/packages-are-installed.mjs && return
   echo "Installing npm packages…"
-  mkdir -p .data
+  mkdir -p -m 700 .data
   npm ci --no-audit --no-fund >.data/npm.log 2>&1 || fail "npm ci failed: see .data/npm.log."
 }

@@ -6,10 +6,8 @@ import { lengthHint } from "./read-number.ts";
 /** A board's length as a tally takes it, with the unit it was understood in, so that the screen can say so. */
 export type TallyLength = { ok: true; mm: number; understood: SpokenUnit } | { ok: false; why: string };
 
-/** Lengths of lumber are spoken in feet; from this number up a bare length in an inch shop is inches. */
-const bareInchesFrom = 24;
-/** In a millimetre shop a bare length below this is metres: no board is 3.05 mm long. */
-const bareMillimetresFrom = 20;
+/** Up to this, a bare length is feet, or metres: lumber is sold in lengths of 4 to 16 ft, and no board is 3.05 mm long. */
+const longestSpoken = 20;
 
 const mostLengthMm = 20_000;
 const mostWidthMm = 2_000;
@@ -17,15 +15,15 @@ const mostAlike = 500;
 
 /**
  * Reads the length of a tally line. A length with its unit is taken at its word. A bare number follows one rule: in an
- * inch shop below 24 it is feet (`10` is 10 ft, `10 1/2` is 10 ft 6 in), from 24 up inches (`126`); in a millimetre shop
- * below 20 it is metres (`3.05`), from 20 up millimetres (`3050`).
+ * inch shop up to 20 it is feet (`10` is 10 ft, `10 1/2` is 10 ft 6 in), above 20 inches (`126`); in a millimetre shop up
+ * to 20 it is metres (`3.05`), above 20 millimetres (`3050`).
  */
 export function parseTallyLength(typed: string, unit: LengthUnit): TallyLength {
   const asUnit = readLength(typed, unit);
   if (!asUnit.ok) return asUnit;
   const small: SpokenUnit = unit === "in" ? "ft" : "m";
-  const smallBelowMm = unit === "in" ? exactMm(bareInchesFrom * mmPerInch) : bareMillimetresFrom;
-  const read = !asUnit.hasUnit && asUnit.mm < smallBelowMm ? readLength(typed, small) : asUnit;
+  const spokenUpToMm = exactMm(longestSpoken * (unit === "in" ? mmPerInch : 1));
+  const read = !asUnit.hasUnit && asUnit.mm <= spokenUpToMm ? readLength(typed, small) : asUnit;
   if (!read.ok) return read;
   const judged = withinLimits(read.mm, unit, { mostMm: mostLengthMm }, read.hasUnit);
   return judged.ok ? { ok: true, mm: read.mm, understood: read.unit } : judged;

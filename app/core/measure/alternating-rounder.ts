@@ -1,5 +1,5 @@
 /**
- * How near to a half counts as one. Lengths are kept to a hundredth of a millimetre, which at 16 ft moves a surface
+ * How near to a half counts as one. A size that came as hundredths of a millimetre moves, at 16 ft, a surface
  * measure by under 0.0003 ft2; a real difference of 1/64 in moves it by 0.001 even at 1 ft.
  */
 const tie = 0.0005;

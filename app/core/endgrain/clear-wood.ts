@@ -4,8 +4,11 @@ import { emptyPlane, type Plane } from "#app/core/endgrain/pixels.ts";
 /** An end's picture in three planes of the working size, 0..255; `null` chroma for a grey picture. */
 export type EndColours = { light: Plane; redness: Plane | null; yellowness: Plane | null };
 
-/** Where the wood can be seen: 1 clear, 0 covered or cracked; and the part of the end that is clear. */
-export type ClearWood = { mask: Plane; clearPart: number };
+/**
+ * Where the wood can be seen: 1 clear, 0 covered or cracked; the part of the end that is clear; and whether the usual colour could
+ * be wood's (null for a grey picture).
+ */
+export type ClearWood = { mask: Plane; clearPart: number; woodColoured: boolean | null };
 
 /** Colour differences beyond this many robust spreads from the end's own wood are not wood. */
 const COLOUR_SPREADS = 4;
@@ -44,7 +47,18 @@ export function findClearWood(colours: EndColours): ClearWood {
     mask.data[i] = value;
     clear += value;
   }
-  return { mask, clearPart: clear / mask.data.length };
+  return {
+    mask,
+    clearPart: clear / mask.data.length,
+    woodColoured: colours.redness && colours.yellowness && woodColoured(colours.redness, colours.yellowness),
+  };
+}
+
+/** Yellow to red, or grey as weathered wood is; green and blue are not wood. */
+function woodColoured(redness: Plane, yellowness: Plane): boolean {
+  const red = quantile(sampled(redness.data).sort(), 0.5);
+  const yellow = quantile(sampled(yellowness.data).sort(), 0.5);
+  return red > -0.02 && yellow > -0.02;
 }
 
 /**

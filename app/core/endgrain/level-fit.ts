@@ -1,5 +1,6 @@
 import { solveSymmetric } from "#app/core/endgrain/normal-equations.ts";
 import { type RingLevels, slopeAt, spanOf, splineWeights } from "#app/core/endgrain/ring-levels.ts";
+import type { TensorCells } from "#app/core/endgrain/tensor-cells.ts";
 
 /** A direction seen at a place: unit normal to the line there, and how far to trust it. */
 export type SeenNormal = { x: number; y: number; nx: number; ny: number; weight: number };
@@ -122,4 +123,21 @@ export function addBending(a: Float64Array, levels: RingLevels, factor: number):
       }
     }
   }
+}
+
+/** How well the lines seen at one scale agree with the contour lines of the levels: mean of coherence × cos 2(difference), −1..1. */
+export function agreementWithLevels(cells: TensorCells, levels: RingLevels): number {
+  let sum = 0;
+  let total = 0;
+  for (let i = 0; i < cells.open.length; i++) {
+    const x = (((i % cells.columns) + 0.5) * levels.width) / cells.columns;
+    const y = ((Math.floor(i / cells.columns) + 0.5) * levels.height) / cells.rows;
+    const slope = slopeAt(levels, x, y);
+    const square = slope.x * slope.x + slope.y * slope.y + 1e-9;
+    const cosine =
+      (cells.cos2[i]! * (slope.x * slope.x - slope.y * slope.y) + cells.sin2[i]! * 2 * slope.x * slope.y) / square;
+    sum += cells.open[i]! * cosine;
+    total += cells.open[i]!;
+  }
+  return total > 0 ? sum / total : 0;
 }

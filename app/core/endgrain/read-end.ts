@@ -1,6 +1,13 @@
 import { chooseField } from "#app/core/endgrain/choose-field.ts";
 import { type ClearWood, findClearWood } from "#app/core/endgrain/clear-wood.ts";
-import { type EndMeasures, overallConfidence, SURE_FROM, stationConfidence } from "#app/core/endgrain/confidence.ts";
+import {
+  type EndMeasures,
+  NO_RINGS_BELOW,
+  overallConfidence,
+  SURE_FROM,
+  stationConfidence,
+  type WoodStructure,
+} from "#app/core/endgrain/confidence.ts";
 import { contrastOf, evenContrast } from "#app/core/endgrain/contrast.ts";
 import {
   type CornerProblem,
@@ -9,6 +16,7 @@ import {
   LEAST_SIDE_PX,
   wholePicture,
 } from "#app/core/endgrain/corner-check.ts";
+import { agreementWithLevels } from "#app/core/endgrain/level-fit.ts";
 import type { EndPixels, Plane } from "#app/core/endgrain/pixels.ts";
 import { ringPitch } from "#app/core/endgrain/ring-count.ts";
 import { findSawMarks, withoutSawMarks } from "#app/core/endgrain/saw-marks.ts";
@@ -31,10 +39,12 @@ export type ReadEndOptions = {
   stationCount?: number;
   /** 30 and 60 degrees (common practice) unless the shop set others. */
   limits?: ClassLimits;
+  /** What the species is known to be; without it the picture's finest texture decides whether the wood counts as porous. */
+  structure?: WoodStructure;
 };
 
 /** Why an end could not be read at all. */
-export type EndProblem = CornerProblem | "too-small" | "nothing-to-see" | "size-not-possible";
+export type EndProblem = CornerProblem | "too-small" | "nothing-to-see" | "no-rings" | "size-not-possible";
 
 export type EndReading = {
   ok: true;
@@ -69,6 +79,7 @@ const MESSAGES: Record<EndProblem, string> = {
   "corners-too-close": `The corners are too close together: each side of the end must be at least ${LEAST_SIDE_PX} pixels long.`,
   "too-small": `The picture is too small to read: the end must be at least ${LEAST_SIDE_PX} pixels thick.`,
   "nothing-to-see": "There is nothing to see in the picture: it is all one shade.",
+  "no-rings": "No rings can be told in this picture. Is it the end of one board, sharp and uncovered?",
   "size-not-possible":
     "Width and thickness must both be given, in millimetres, more than 0 and less than 3000, the width no more than 100 times the thickness.",
 };
@@ -87,11 +98,10 @@ const FURTHEST_PITH_WIDTHS = 6;
 export function readEnd(pixels: EndPixels, options: ReadEndOptions = {}): EndReading | EndRefusal {
   const corners = options.corners ?? wholePicture(pixels);
   const problem = inputProblem(pixels, corners, options);
-  if (problem) return { ok: false, problem, message: MESSAGES[problem] };
+  if (problem) return refusal(problem);
   const aspect = options.widthMm && options.thicknessMm ? options.widthMm / options.thicknessMm : null;
   const colours = straightened(pixels, corners, workingSize(corners, aspect));
-  const contrast = contrastOf(colours.light);
-  if (contrast < LEAST_CONTRAST) return { ok: false, problem: "nothing-to-see", message: MESSAGES["nothing-to-see"] };
+  if (contrastOf(colours.light) < LEAST_CONTRAST) return refusal("nothing-to-see");
   const clear = findClearWood(colours);
   const mask = clear.clearPart < 0.995 ? clear.mask : null;
   const window = Math.round(0.15 * Math.min(colours.light.width, colours.light.height));
@@ -99,9 +109,12 @@ export function readEnd(pixels: EndPixels, options: ReadEndOptions = {}): EndRea
   const saw = findSawMarks(even);
   return readPicture(saw ? withoutSawMarks(even, saw) : even, mask, corners, options, {
     clear,
-    contrast,
     sawShare: saw?.share ?? 0,
   });
+}
+
+function refusal(problem: EndProblem): EndRefusal {
+  return { ok: false, problem, message: MESSAGES[problem] };
 }
 
 function inputProblem(pixels: EndPixels, corners: EndCorners, options: ReadEndOptions): EndProblem | null {
@@ -120,10 +133,10 @@ function readPicture(
   mask: Plane | null,
   corners: EndCorners,
   options: ReadEndOptions,
-  seen: { clear: ClearWood; contrast: number; sawShare: number },
+  seen: { clear: ClearWood; sawShare: number },
 ): EndReading | EndRefusal {
   const found = chooseField(picture, mask);
-  if (!found) return { ok: false, problem: "too-small", message: MESSAGES["too-small"] };
+  if (!found) return refusal("too-small");
   const { chosen, rival } = found;
   const { levels } = chosen;
   const limits = options.limits ?? { flatBelowDeg: 30, quarteredAboveDeg: 60 };
@@ -143,24 +156,26 @@ function readPicture(
     evidence: chosen.evidence,
     excess: chosen.best.excess,
     rivalEvidence: rival?.evidence ?? 0,
+    fineAgreement: agreementWithLevels(chosen.fits[0]!.cells, levels),
     clearPart: seen.clear.clearPart,
     sawShare: seen.sawShare,
-    contrast: seen.contrast,
     pithWidths,
-    scalePx: chosen.best.cells.scalePx,
-    lead: ranked[0]![1] - ranked[1]![1],
+    woodColoured: seen.clear.woodColoured,
   };
-  const { confidence, doubts } = overallConfidence(measures);
+  if (measures.evidence < NO_RINGS_BELOW) return refusal("no-rings");
+  const { confidence, doubts } = overallConfidence(measures, options.structure);
   return {
     ok: true,
     corners,
     widthMm,
     thicknessMm,
-    stations: stations.map(({ position, angleDeg, signedDeg, explained }) => ({
+    stations: stations.map(({ position, angleDeg, signedDeg, explained, spreadDeg }) => ({
+      explained,
+      spreadDeg,
       position,
       angleDeg,
       signedDeg,
-      confidence: stationConfidence(confidence, explained, chosen.explained.typical),
+      confidence: stationConfidence(confidence, explained, spreadDeg),
     })),
     angleDeg,
     shares,

@@ -11,6 +11,8 @@ export type FieldStation = {
   signedDeg: number;
 
   explained: number;
+  /** Spread of the angle within the part, degrees: large near the pith. */
+  spreadDeg: number;
 };
 
 const SAMPLES_ACROSS = 14;
@@ -30,6 +32,7 @@ export function readStations(
   const each = 1 / (count * SAMPLES_ACROSS * SAMPLES_DOWN);
   const stations = Array.from({ length: count }, (_, s): FieldStation => {
     let sum = 0;
+    let squares = 0;
     let cos2 = 0;
     let sin2 = 0;
     for (let i = 0; i < SAMPLES_ACROSS; i++) {
@@ -39,6 +42,7 @@ export function readStations(
         const signed = Math.atan2(slope.x, -slope.y);
         const acute = Math.atan2(Math.abs(slope.x), Math.abs(slope.y)) * DEG;
         sum += acute;
+        squares += acute * acute;
         cos2 += Math.cos(2 * signed);
         sin2 += Math.sin(2 * signed);
         if (acute < limits.flatBelowDeg) shares.flat += each;
@@ -51,6 +55,7 @@ export function readStations(
       position: (s + 0.5) / count,
       angleDeg: sum / n,
       signedDeg: (Math.atan2(sin2, cos2) / 2) * DEG,
+      spreadDeg: Math.sqrt(Math.max(0, squares / n - (sum / n) ** 2)),
       explained: meanExplained(explained, s / count, (s + 1) / count),
     };
   });

@@ -1,5 +1,6 @@
+import type { ReactNode } from "react";
 import { Button as AriaButton, Menu, MenuItem, MenuTrigger, Popover, Separator } from "react-aria-components";
-import { Form, Link, NavLink } from "react-router";
+import { Link, NavLink } from "react-router";
 
 interface ShopHeaderProps {
   shopName: string;
@@ -7,10 +8,12 @@ interface ShopHeaderProps {
   role: string;
   /** What this role is led to; each page asks again. */
   sees: { deliveries: boolean; settings: boolean; people: boolean };
+  /** The box for finding a board. */
+  find?: ReactNode;
 }
 
 /** The iron bar across the top: where one can go, a box to find a board by tag, and who is at work where. */
-export function ShopHeader({ shopName, personName, role, sees }: ShopHeaderProps) {
+export function ShopHeader({ shopName, personName, role, sees, find }: ShopHeaderProps) {
   return (
     <header className="bg-bar text-bar-ink" data-screen-only>
       <a
@@ -42,15 +45,7 @@ export function ShopHeader({ shopName, personName, role, sees }: ShopHeaderProps
           {sees.deliveries ? <Tab to="/deliveries">Deliveries</Tab> : null}
           <Tab to="/projects">Projects</Tab>
         </nav>
-        <Form action="/boards" role="search" className="order-4 w-full md:order-2 md:ml-auto md:w-64">
-          <input
-            name="q"
-            type="search"
-            aria-label="Find a board, tag or word"
-            placeholder="Find a board, tag or word"
-            className="min-h-11 w-full rounded-lg border border-iron-500 bg-transparent px-3 text-bar-ink placeholder:text-bar-soft"
-          />
-        </Form>
+        <div className="order-4 w-full md:order-2 md:ml-auto md:w-64">{find}</div>
       </div>
     </header>
   );

@@ -98,6 +98,12 @@ const orders: Record<BoardFilter["sort"], { column: string; order: "asc" | "desc
   angle: { column: "b.ring_mean_deg", order: "desc" },
 };
 
+/** The order of a list, ties by identifier in the same direction, so that one index serves both. */
+function inOrder(sort: BoardFilter["sort"]) {
+  const order = orders[sort];
+  return [order, { column: "b.id", order: order.order }];
+}
+
 /** One page of the list, with how many boards match in all. */
 export async function listBoards(
   db: Knex,
@@ -120,12 +126,12 @@ export async function listSummaries(
 ): Promise<BoardSummary[]> {
   // The slice is found on an index alone; only its rows are then read whole.
   const ids = filtered(db, actor, filter)
-    .orderBy([orders[filter.sort], { column: "b.id" }])
+    .orderBy(inOrder(filter.sort))
     .limit(slice.limit)
     .offset(slice.offset)
     .select("b.id");
   const rows = await withPlace(db("boards as b").join(ids.as("slice"), "slice.id", "b.id"))
-    .orderBy([orders[filter.sort], { column: "b.id" }])
+    .orderBy(inOrder(filter.sort))
     .select(summaryColumns);
   return withHolds(db, actor, rows);
 }

@@ -1,6 +1,7 @@
 import { Outlet } from "react-router";
 import { ErrorPage } from "#app/components/error-page.tsx";
 import { ShopHeader } from "#app/components/shop-header.tsx";
+import { FindBoard } from "#app/domain/boards/find-board.tsx";
 import { can } from "#app/domain/shop/permissions.ts";
 import { ShopViewProvider } from "#app/domain/shop/shop-view.tsx";
 import { requireAtWork } from "#app/server/at-work.server.ts";
@@ -32,6 +33,7 @@ export default function ShopLayout({ loaderData }: Route.ComponentProps) {
         shopName={shop.name}
         personName={personName}
         role={role}
+        find={<FindBoard />}
         sees={{
           deliveries: can(role, "delivery:see"),
           settings: can(role, "shop:settings"),

@@ -1,8 +1,7 @@
 import { emptyPlane, type Plane } from "#app/core/endgrain/pixels.ts";
 
-/** Samples of a Gaussian of the given sigma (pixels), out to three sigma, summing to 1. */
-export function gaussianKernel(sigmaPx: number): Float32Array {
-  const radius = Math.max(1, Math.ceil(3 * sigmaPx));
+/** Samples of a Gaussian of the given sigma (pixels), out to three sigma unless told, summing to 1. */
+export function gaussianKernel(sigmaPx: number, radius = Math.max(1, Math.ceil(3 * sigmaPx))): Float32Array {
   const kernel = new Float32Array(2 * radius + 1);
   let sum = 0;
   for (let i = -radius; i <= radius; i++) {

@@ -2,6 +2,11 @@ import { boxMean } from "#app/core/endgrain/blur.ts";
 import type { EndColours } from "#app/core/endgrain/clear-wood.ts";
 import { channelsOf, type EndPixels, emptyPlane, type Plane } from "#app/core/endgrain/pixels.ts";
 
+/** Luminance 0..255 of a picture. */
+export function luminance(pixels: EndPixels): Plane {
+  return endColours(pixels).light;
+}
+
 /** The three planes that tell wood from what covers it: luminance (ITU-R BT.601 weights), and how red and how yellow for its brightness. */
 export function endColours(pixels: EndPixels): EndColours {
   const channels = channelsOf(pixels);

@@ -5,7 +5,13 @@ import { dryings, priceBases } from "./delivery.ts";
 
 const words = (max: number) => z.string().trim().max(max, `At most ${max} characters.`).default("");
 
-/** A delivery as typed from the supplier's papers. The supplier is one of the shop's, or a new name. */
+/** A day there is: 31 February is none, though a Date would turn it into one in March. */
+function isDay(day: string): boolean {
+  const at = new Date(`${day}T00:00:00Z`);
+  return !Number.isNaN(at.getTime()) && at.toISOString().startsWith(day) && day >= "1900";
+}
+
+/** A delivery as typed from the supplier's papers. The supplier is one of the shop's, or a new name, which counts before the choice. */
 export function deliveryForm(shop: { currency: string }) {
   return z
     .object({
@@ -14,15 +20,15 @@ export function deliveryForm(shop: { currency: string }) {
       receivedOn: z
         .string({ error: "When did it come?" })
         .regex(/^\d{4}-\d{2}-\d{2}$/, "Write the date as year-month-day.")
-        .refine((day) => !Number.isNaN(Date.parse(day)), "There is no such day."),
+        .refine(isDay, "There is no such day."),
       reference: words(80),
       species: z.string({ error: "Choose the species." }).refine(isSpeciesCode, "Choose the species."),
-      quarters: z.coerce.number({ error: "Choose the quarters." }).int().min(1).max(64),
+      quarters: z.coerce.number({ error: "Choose the quarters." }).int().min(1).max(40),
       drying: z.enum(dryings).default("kiln"),
       grade: words(40),
       claimedVolume: z.coerce
         .number({ error: "A number, such as 212 or 0.5." })
-        .positive("More than nothing.")
+        .min(0.001, "More than nothing.")
         .max(1_000_000, "That cannot be.")
         .nullable()
         .default(null),

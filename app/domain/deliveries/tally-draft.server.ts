@@ -1,0 +1,59 @@
+import type { Knex } from "knex";
+import type { Actor } from "#app/domain/shop/actor.ts";
+import type { TallyRow } from "./tally.ts";
+import { type KeptDraft, keptDraft } from "./tally-draft.ts";
+
+const inColumn = keptDraft.omit({ version: true });
+const nothing = { rows: [], writer: "", byName: "", at: null };
+
+export interface DraftState {
+  /** When the delivery was tallied; its draft is then gone. */
+  talliedAt: Date | null;
+  draft: KeptDraft;
+}
+
+/** A delivery's half-typed tally, or null when the delivery is not in this shop. */
+export async function readTallyDraft(
+  db: Knex,
+  actor: Pick<Actor, "shopId">,
+  deliveryId: string,
+): Promise<DraftState | null> {
+  const row = await db("deliveries")
+    .where({ id: deliveryId, shop_id: actor.shopId, deleted_at: null })
+    .first("tally_draft", "tally_draft_version", "tallied_at");
+  if (!row) return null;
+  const kept = row.tally_draft === null ? null : inColumn.safeParse(JSON.parse(row.tally_draft));
+  return {
+    talliedAt: row.tallied_at,
+    draft: { ...(kept?.data ?? nothing), version: row.tally_draft_version },
+  };
+}
+
+export type DraftKept =
+  | { kept: true; version: number }
+  | { kept: false; why: "newer"; draft: KeptDraft }
+  | { kept: false; why: "tallied" };
+
+/**
+ * Keeps a half-typed tally, unless another page has kept a newer one meanwhile, which comes back, or the delivery is tallied.
+ *
+ * @param draft.version the version it was typed over.
+ * @returns null when the delivery is not in this shop.
+ */
+export async function keepTallyDraft(
+  db: Knex,
+  actor: Pick<Actor, "shopId" | "personName">,
+  deliveryId: string,
+  draft: { rows: TallyRow[]; version: number; writer: string },
+  now: Date,
+): Promise<DraftKept | null> {
+  const kept = { rows: draft.rows, writer: draft.writer, byName: actor.personName, at: now.toISOString() };
+  const changed = await db("deliveries")
+    .where({ id: deliveryId, shop_id: actor.shopId, tally_draft_version: draft.version, deleted_at: null })
+    .whereNull("tallied_at")
+    .update({ tally_draft: JSON.stringify(kept), tally_draft_version: draft.version + 1 });
+  if (changed === 1) return { kept: true, version: draft.version + 1 };
+  const current = await readTallyDraft(db, actor, deliveryId);
+  if (!current) return null;
+  return current.talliedAt ? { kept: false, why: "tallied" } : { kept: false, why: "newer", draft: current.draft };
+}

@@ -43,4 +43,5 @@ export default [
       route("photos/:photoId/confirm", "routes/api/confirm-photo.ts"),
     ]),
   ]),
+  route("*", "routes/not-here.tsx"),
 ] satisfies RouteConfig;

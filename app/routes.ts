@@ -14,6 +14,8 @@ export default [
         route("defects", "routes/boards/defects.tsx"),
       ]),
       route(":boardId/reserve", "routes/boards/reserve.tsx"),
+      route(":boardId/rings/by-eye", "routes/rings/by-eye.tsx"),
+      route(":boardId/rings/:photoId", "routes/rings/mark.tsx"),
       route(":boardId/state", "routes/boards/state.ts"),
       route(":boardId/delete", "routes/boards/delete.tsx"),
       route(":boardId/photos/:photoId/remove", "routes/boards/remove-photo.ts"),

@@ -1,4 +1,5 @@
 import type { PointMm } from "./ring-types.ts";
+import { type EndSize, requireEndSize } from "./stations.ts";
 
 /** A point in a picture, in its pixels, y down. */
 export interface PointPx {
@@ -11,100 +12,113 @@ export type EndCorners = readonly [PointPx, PointPx, PointPx, PointPx];
 
 /** Carries points between a picture and the flat end in millimetres, perspective taken out. */
 export interface EndPlane {
+  /** NaN for a place at or beyond the horizon of the end's plane, where no mark on the end can be. */
   toMm(point: PointPx): PointMm;
   toPx(point: PointMm): PointPx;
 }
 
-export type PlaneResult = { ok: true; plane: EndPlane } | { ok: false; why: string };
+export type CornerFault = "not numbers" | "too close" | "in a line" | "crossed" | "concave" | "wrong way round";
 
-const leastAreaPx = 16;
+export type PlaneResult = { ok: true; plane: EndPlane } | { ok: false; fault: CornerFault; why: string };
+
+const whys: Record<CornerFault, string> = {
+  "not numbers": "Mark all four corners of the end: one of them is not a number.",
+  "too close": "Two corners are on top of each other: each side of the end must be at least 4 pixels long.",
+  "in a line": "Three corners are in one line: move them to the corners of the end.",
+  crossed: "The corners cross: go round the end, top left, top right, bottom right, bottom left.",
+  concave: "One corner lies inside the triangle of the others: move it out to the corner of the end.",
+  "wrong way round": "The corners go round the wrong way: top left, top right, bottom right, bottom left.",
+};
+
+const leastSidePx = 4;
+/** Sine of the least turn at a corner, about 3 degrees: flatter ones leave no end to look at. */
+const leastTurn = 0.05;
 
 /**
- * The plane of a board's end from where its corners lie in a picture and how large it really is: the projective map that takes the four corners to the
- * rectangle (Hartley and Zisserman, Multiple View Geometry, 2nd ed., section 4.1; from memory).
+ * The plane of a board's end from where its corners lie in a picture and how large it really is.
  *
  * @param size of the end in millimetres, both above zero.
- * @returns why not, when the corners do not go round a four-sided shape in order.
+ * @returns the way there and back, or why these corners cannot be an end seen from the front.
  */
-export function endPlane(corners: EndCorners, size: { widthMm: number; thicknessMm: number }): PlaneResult {
-  const why = cornersProblem(corners);
-  if (why) return { ok: false, why };
-  const { widthMm, thicknessMm } = size;
-  const target = [
-    { x: 0, y: 0 },
-    { x: widthMm, y: 0 },
-    { x: widthMm, y: thicknessMm },
-    { x: 0, y: thicknessMm },
-  ];
-  const forward = homography(corners, target);
-  const back = homography(target, corners);
-  if (!forward || !back) return { ok: false, why: "The corners lie too close to one line." };
+export function endPlane(corners: EndCorners, size: EndSize): PlaneResult {
+  const { widthMm, thicknessMm } = requireEndSize({ widthMm: size.widthMm, thicknessMm: size.thicknessMm });
+  const fault = cornerFault(corners);
+  if (fault) return { ok: false, fault, why: whys[fault] };
+  const square = squareToCorners(corners);
+  const back = adjugate(square);
   return {
     ok: true,
     plane: {
-      toMm: (point) => {
-        const { x, y } = apply(forward, point);
-        return { xMm: x, yMm: y };
+      toPx: ({ xMm, yMm }) => {
+        const [x, y, w] = mapped(square, xMm / widthMm, yMm / thicknessMm);
+        return { x: x / w, y: y / w };
       },
-      toPx: (point) => apply(back, { x: point.xMm, y: point.yMm }),
+      toMm: ({ x, y }) => {
+        const [u, v, w] = mapped(back, x, y);
+        // The adjugate keeps the sign of w for every place on the corners' side of the horizon.
+        if (!(w > 0)) return { xMm: Number.NaN, yMm: Number.NaN };
+        return { xMm: (u / w) * widthMm, yMm: (v / w) * thicknessMm };
+      },
     },
   };
 }
 
-function cornersProblem(corners: EndCorners): string | null {
-  if (corners.some(({ x, y }) => !Number.isFinite(x) || !Number.isFinite(y))) return "A corner is not a number.";
-  const turns = corners.map((corner, i) => {
-    const next = corners[(i + 1) % 4] as PointPx;
-    const after = corners[(i + 2) % 4] as PointPx;
-    return (next.x - corner.x) * (after.y - next.y) - (next.y - corner.y) * (after.x - next.x);
+function cornerFault(corners: EndCorners): CornerFault | null {
+  if (corners.length !== 4 || corners.some(({ x, y }) => !Number.isFinite(x) || !Number.isFinite(y)))
+    return "not numbers";
+  const sides = corners.map((p, i) => ({ x: corners[(i + 1) % 4]!.x - p.x, y: corners[(i + 1) % 4]!.y - p.y }));
+  const lengths = sides.map(({ x, y }) => Math.hypot(x, y));
+  if (lengths.some((length) => length < leastSidePx)) return "too close";
+  const turns = sides.map((side, i) => {
+    const next = (i + 1) % 4;
+    return (side.x * sides[next]!.y - side.y * sides[next]!.x) / (lengths[i]! * lengths[next]!);
   });
-  // Going round once, every turn is to the same side; y points down, so top left first turns to the positive side.
-  if (turns.every((turn) => turn < 0))
-    return "The corners go round the wrong way: top left comes first, then top right.";
-  if (turns.some((turn) => turn <= leastAreaPx))
-    return "The corners cross, or one lies between the others: put each on its own corner of the board's end.";
-  return null;
+  if (turns.some((turn) => Math.abs(turn) < leastTurn)) return "in a line";
+  const rightTurns = turns.filter((turn) => turn > 0).length;
+  if (rightTurns === 4) return null;
+  if (rightTurns === 0) return "wrong way round";
+  return rightTurns === 2 ? "crossed" : "concave";
 }
 
-type Matrix = readonly number[];
-
-function apply(h: Matrix, { x, y }: PointPx): PointPx {
-  const [a, b, c, d, e, f, g, i] = h as [number, number, number, number, number, number, number, number];
-  const w = g * x + i * y + 1;
-  return { x: (a * x + b * y + c) / w, y: (d * x + e * y + f) / w };
+/** The 3 × 3 matrix, row by row, that takes the unit square to four corners (closed form: P. Heckbert, Fundamentals of texture mapping, 1989). */
+function squareToCorners(corners: EndCorners): number[] {
+  const [a, b, c, d] = corners;
+  const sum = { x: a.x - b.x + c.x - d.x, y: a.y - b.y + c.y - d.y };
+  const right = { x: b.x - c.x, y: b.y - c.y };
+  const bottom = { x: d.x - c.x, y: d.y - c.y };
+  const area = right.x * bottom.y - bottom.x * right.y;
+  const g = (sum.x * bottom.y - bottom.x * sum.y) / area;
+  const h = (right.x * sum.y - sum.x * right.y) / area;
+  return [b.x - a.x + g * b.x, d.x - a.x + h * d.x, a.x, b.y - a.y + g * b.y, d.y - a.y + h * d.y, a.y, g, h, 1];
 }
 
-/** Eight equations in eight unknowns, two for each corner, the ninth entry being 1. */
-function homography(from: readonly PointPx[], to: readonly PointPx[]): Matrix | null {
-  const rows = from.flatMap(({ x, y }, i) => {
-    const { x: u, y: v } = to[i] as PointPx;
-    return [
-      [x, y, 1, 0, 0, 0, -u * x, -u * y, u],
-      [0, 0, 0, x, y, 1, -v * x, -v * y, v],
-    ];
-  });
-  return solve(rows);
+/** The inverse of a 3 × 3 matrix up to a positive factor, given a positive determinant. */
+function adjugate(matrix: readonly number[]): number[] {
+  const [a, b, c, d, e, f, g, h, i] = matrix as [
+    number,
+    number,
+    number,
+    number,
+    number,
+    number,
+    number,
+    number,
+    number,
+  ];
+  return [
+    e * i - f * h,
+    c * h - b * i,
+    b * f - c * e,
+    f * g - d * i,
+    a * i - c * g,
+    c * d - a * f,
+    d * h - e * g,
+    b * g - a * h,
+    a * e - b * d,
+  ];
 }
 
-/** Gauss elimination with the largest pivot, on rows that carry their right side last. */
-function solve(rows: number[][]): number[] | null {
-  const n = rows.length;
-  for (let column = 0; column < n; column++) {
-    let best = column;
-    for (let row = column + 1; row < n; row++)
-      if (Math.abs(at(rows, row, column)) > Math.abs(at(rows, best, column))) best = row;
-    if (Math.abs(at(rows, best, column)) < 1e-12) return null;
-    [rows[column], rows[best]] = [rows[best] as number[], rows[column] as number[]];
-    for (let row = 0; row < n; row++) {
-      if (row === column) continue;
-      const factor = at(rows, row, column) / at(rows, column, column);
-      const target = rows[row] as number[];
-      for (let k = column; k <= n; k++) target[k] = (target[k] as number) - factor * at(rows, column, k);
-    }
-  }
-  return rows.map((row, i) => (row[n] as number) / (row[i] as number));
-}
-
-function at(rows: number[][], row: number, column: number): number {
-  return (rows[row] as number[])[column] as number;
+function mapped(matrix: readonly number[], x: number, y: number): [number, number, number] {
+  const row = (i: number) => matrix[i]! * x + matrix[i + 1]! * y + matrix[i + 2]!;
+  return [row(0), row(3), row(6)];
 }

@@ -1,175 +1,181 @@
+import { type EndCorners, endPlane, type PointPx } from "./perspective.ts";
+import { fitRings, type RingFit } from "./ring-fit.ts";
+import { centreDistance, centreMm, type EndFrame, type Place } from "./ring-levels.ts";
 import type { PointMm, RingField } from "./ring-types.ts";
-import { fieldFromPith } from "./stations.ts";
+import { type EndSize, fieldFromPith, requireEndSize } from "./stations.ts";
 
 /** A line drawn by hand along one growth ring. */
 export type Stroke = readonly PointMm[];
 
 export interface StrokeReading {
   field: RingField;
-  /** How far the strokes stray from the fitted rings, root mean square. */
-  strayMm: number;
-  /** 0 to 1: how many strokes, how well they agree, how much of the width they speak for. */
+  /** 0 to 1: mean of the stations', less where the strokes disagree or only one was drawn. */
   confidence: number;
+  /** How far the strokes stray from the fitted rings, root mean square: together, and each in its turn. */
+  strayMm: number;
+  strokeStrayMm: number[];
+  /** What speaks against the reading, in words for the page; empty when nothing does. */
+  doubts: string[];
 }
 
 export type StrokesResult = { ok: true; reading: StrokeReading } | { ok: false; why: string };
 
-const stepMm = 1.5;
-const leastStrokeMm = 4;
-/** A hand on a screen strays about this much from a ring. Our own estimate. */
-const handMm = 0.35;
-/** Beyond this many widths the pith's distance means nothing: the rings are straight. */
-const straightBeyond = 25;
+const mostStrokes = 40;
+/** Of the thickness: a shorter stroke has no direction to speak of. */
+const leastStroke = 0.15;
+/** A stroke is taken at this many places, evenly along it, however it was recorded. */
+const placesPerStroke = 24;
+/** Rings that turn by less than 3 degrees across the end's diagonal are as good as straight. */
+const straightBeyond = 2 / ((3 * Math.PI) / 180);
+
+/** A stroke with no other to check it is believed less. */
+const aloneFactor = 0.6;
+
+/** How far a hand strays from a ring: 0.3 mm, or 0.3 % of the width, as a wide board's end is drawn smaller on the screen. */
+function handNoiseMm({ widthMm }: EndSize): number {
+  return Math.max(0.3, 0.003 * widthMm);
+}
 
 /**
- * Fits concentric rings to strokes drawn along them: one centre, a radius for each stroke, by least squares on the distances (Gauss–Newton from where
- * the strokes' normals meet). Strokes that are as good as straight and parallel give parallel rings and no pith.
+ * Rings of a board's end from strokes drawn along growth rings: circles round one pith, each stroke on a circle of its own. Strokes that run nearly
+ * straight put the pith far off; where it is so far that it does not show, it is null and the rings run straight.
  *
- * @param strokes in millimetres on the end, its top left corner the origin.
+ * @param strokes in millimetres of the end, best two or three, well apart; they may run a little past its edges.
  * @param size of the end in millimetres.
+ * @param ringsPerInch if somebody counted.
+ * @returns the reading, or why these strokes cannot be read.
  */
-export function readStrokes(strokes: readonly Stroke[], size: { widthMm: number; thicknessMm: number }): StrokesResult {
-  const lines = strokes.map(evenly).filter((line) => line.length >= 3);
-  if (lines.length === 0) return { ok: false, why: "Draw along a ring, from one edge of the board towards the other." };
-  const centre = refine(lines, whereNormalsMeet(lines), size);
-  const direction = meanDirectionDeg(lines);
-  const middle = { xMm: size.widthMm / 2, yMm: size.thicknessMm / 2 };
-  const straight = distance(centre, middle) > straightBeyond * size.widthMm;
-  const pith = straight ? farAlongNormal(middle, direction, straightBeyond * size.widthMm) : centre;
-  const field = fieldFromPith(size, pith, null);
-  const strayMm = stray(lines, pith);
-  const agreement = 1 / (1 + (strayMm / (3 * handMm)) ** 2);
-  const several = lines.length === 1 ? 0.6 : lines.length === 2 ? 0.9 : 1;
-  const stations = field.stations.map((station) => ({
+export function readStrokes(
+  strokes: readonly Stroke[],
+  { widthMm, thicknessMm }: EndSize,
+  ringsPerInch: number | null = null,
+): StrokesResult {
+  const size = requireEndSize({ widthMm, thicknessMm });
+  const why = strokesProblem(strokes, size);
+  if (why) return { ok: false, why };
+  const frame: EndFrame = {
+    middle: { xMm: widthMm / 2, yMm: thicknessMm / 2 },
+    halfMm: Math.hypot(widthMm, thicknessMm) / 2,
+  };
+  const places = strokes.map((stroke) => evenly(stroke, frame));
+  const noiseMm = handNoiseMm(size);
+  const fit = fitRings(places, noiseMm / frame.halfMm);
+  const centre = centreMm(fit.centre, frame);
+  const round = fieldFromPith(size, centre, ringsPerInch);
+  const stations = round.stations.map((station) => ({
     ...station,
-    confidence: agreement * several * nearness(lines, station.position * size.widthMm, size.widthMm),
+    confidence: stationConfidence(fit, places, station.position, size, frame),
   }));
-  const confidence = stations.reduce((sum, station) => sum + station.confidence, 0) / stations.length;
-  return { ok: true, reading: { field: { ...field, stations, pith: straight ? null : pith }, strayMm, confidence } };
+  const pith = centreDistance(fit.centre) > straightBeyond ? null : centre;
+  const strayMm = fit.residual * frame.halfMm;
+  const strokeStrayMm = fit.strokeResiduals.map((residual) => residual * frame.halfMm);
+  const sure = stations.reduce((sum, { confidence }) => sum + confidence, 0) / stations.length;
+  const agreement = Math.min(1, (3 * noiseMm) / Math.max(strayMm, 1e-9));
+  return {
+    ok: true,
+    reading: {
+      field: { ...round, stations, pith },
+      confidence: sure * agreement * (strokes.length === 1 ? aloneFactor : 1),
+      strayMm,
+      strokeStrayMm,
+      doubts: doubts(strokeStrayMm, sure, noiseMm),
+    },
+  };
 }
 
-/** Points at even steps along a stroke, so that a slow hand does not count for more; nothing for a dab. */
-function evenly(stroke: Stroke): PointMm[] {
-  const points: PointMm[] = [];
-  let carried = 0;
-  let length = 0;
+/**
+ * The same from strokes on a photo, in its pixels, with perspective taken out by the end's corners (top left, top right, bottom right, bottom left)
+ * and its real size.
+ */
+export function readPhotoStrokes(
+  strokes: readonly (readonly PointPx[])[],
+  corners: EndCorners,
+  size: EndSize,
+  ringsPerInch: number | null = null,
+): StrokesResult {
+  const result = endPlane(corners, size);
+  if (!result.ok) return { ok: false, why: result.why };
+  return readStrokes(
+    strokes.map((stroke) => stroke.map(result.plane.toMm)),
+    size,
+    ringsPerInch,
+  );
+}
+
+function offTheEnd(index: number): string {
+  return `Stroke ${index + 1} runs off the board's end: draw it between the four corners.`;
+}
+
+function strokesProblem(strokes: readonly Stroke[], { widthMm, thicknessMm }: EndSize): string | null {
+  if (strokes.length === 0) return "Draw along a ring, from one edge of the board towards the other.";
+  if (strokes.length > mostStrokes) return `At most ${mostStrokes} strokes can be read at once.`;
+  for (const [i, stroke] of strokes.entries()) {
+    const off = stroke.some(
+      ({ xMm, yMm }) => !(Math.abs(xMm / widthMm - 0.5) < 1 && Math.abs(yMm / thicknessMm - 0.5) < 1.5),
+    );
+    if (off) return offTheEnd(i);
+    if (lengthMm(stroke) < leastStroke * Math.min(widthMm, thicknessMm))
+      return `Stroke ${i + 1} is too short to have a direction: follow its ring further.`;
+  }
+  return null;
+}
+
+function lengthMm(stroke: Stroke): number {
+  return stroke.reduce((sum, { xMm, yMm }, i) => {
+    const before = stroke[i - 1];
+    return before ? sum + Math.hypot(xMm - before.xMm, yMm - before.yMm) : sum;
+  }, 0);
+}
+
+/** Places at even steps along a stroke. */
+function evenly(stroke: Stroke, { middle, halfMm }: EndFrame): Place[] {
+  const step = lengthMm(stroke) / (placesPerStroke - 1);
+  const places: Place[] = [];
+  let walked = 0;
   for (let i = 1; i < stroke.length; i++) {
-    const [a, b] = [stroke[i - 1] as PointMm, stroke[i] as PointMm];
-    const part = distance(a, b);
-    for (let along = carried; along <= part && part > 0; along += stepMm)
-      points.push({ xMm: a.xMm + ((b.xMm - a.xMm) * along) / part, yMm: a.yMm + ((b.yMm - a.yMm) * along) / part });
-    carried = part > 0 ? (stepMm - ((part - carried) % stepMm)) % stepMm : carried;
-    length += part;
-  }
-  return length < leastStrokeMm ? [] : points;
-}
-
-/** The point nearest to the normals of all pieces of all strokes. Pieces span several steps: neighbours alone would be mostly noise. */
-function whereNormalsMeet(lines: PointMm[][]): PointMm {
-  let [xx, xy, yy, bx, by] = [0, 0, 0, 0, 0];
-  for (const line of lines) {
-    const reach = Math.max(1, Math.floor(line.length / 3));
-    for (let i = 0; i + reach < line.length; i++) {
-      const [a, b] = [line[i] as PointMm, line[i + reach] as PointMm];
-      const span = distance(a, b);
-      if (span === 0) continue;
-      const [tx, ty] = [(b.xMm - a.xMm) / span, (b.yMm - a.yMm) / span];
-      const along = (tx * (a.xMm + b.xMm) + ty * (a.yMm + b.yMm)) / 2;
-      xx += tx * tx;
-      xy += tx * ty;
-      yy += ty * ty;
-      bx += tx * along;
-      by += ty * along;
-    }
-  }
-  // A little weight toward nowhere keeps parallel strokes from dividing by nothing: their centre lands very far off.
-  const ridge = 1e-9 * (xx + yy);
-  const determinant = (xx + ridge) * (yy + ridge) - xy * xy;
-  return { xMm: (bx * (yy + ridge) - by * xy) / determinant, yMm: (by * (xx + ridge) - bx * xy) / determinant };
-}
-
-/** Gauss–Newton on the spread of each stroke's distances from the centre; steps are halved until they help. */
-function refine(lines: PointMm[][], start: PointMm, size: { widthMm: number }): PointMm {
-  let centre = start;
-  let best = stray(lines, centre);
-  for (let round = 0; round < 60; round++) {
-    let [xx, xy, yy, gx, gy] = [0, 0, 0, 0, 0];
-    for (const line of lines) {
-      const rays = line.map((p) => {
-        const r = Math.max(1e-6, distance(p, centre));
-        return { r, ux: (centre.xMm - p.xMm) / r, uy: (centre.yMm - p.yMm) / r };
+    const [from, to] = [stroke[i - 1]!, stroke[i]!];
+    const span = Math.hypot(to.xMm - from.xMm, to.yMm - from.yMm);
+    while (span > 0 && places.length < placesPerStroke && places.length * step <= walked + span * (1 + 1e-9)) {
+      const share = (places.length * step - walked) / span;
+      places.push({
+        x: (from.xMm + share * (to.xMm - from.xMm) - middle.xMm) / halfMm,
+        y: (from.yMm + share * (to.yMm - from.yMm) - middle.yMm) / halfMm,
       });
-      const mean = (key: "r" | "ux" | "uy") => rays.reduce((sum, ray) => sum + ray[key], 0) / rays.length;
-      const [r, ux, uy] = [mean("r"), mean("ux"), mean("uy")];
-      for (const ray of rays) {
-        const [jx, jy, residual] = [ray.ux - ux, ray.uy - uy, ray.r - r];
-        xx += jx * jx;
-        xy += jx * jy;
-        yy += jy * jy;
-        gx += jx * residual;
-        gy += jy * residual;
-      }
     }
-    const damping = 1e-7 * (xx + yy) + 1e-15;
-    const determinant = (xx + damping) * (yy + damping) - xy * xy;
-    if (!(determinant > 0)) break;
-    let step = {
-      xMm: -(gx * (yy + damping) - gy * xy) / determinant,
-      yMm: -(gy * (xx + damping) - gx * xy) / determinant,
-    };
-    let helped = false;
-    for (let halving = 0; halving < 12; halving++) {
-      const next = { xMm: centre.xMm + step.xMm, yMm: centre.yMm + step.yMm };
-      const value = stray(lines, next);
-      if (value < best) {
-        helped = best - value > 1e-7;
-        [centre, best] = [next, value];
-        break;
-      }
-      step = { xMm: step.xMm / 2, yMm: step.yMm / 2 };
-    }
-    if (!helped || Math.abs(centre.xMm) > 1e3 * size.widthMm) break;
+    walked += span;
   }
-  return centre;
+  return places;
 }
 
-/** Root mean square of how far points stray from their stroke's own circle round the centre. */
-function stray(lines: PointMm[][], centre: PointMm): number {
-  let sum = 0;
-  let count = 0;
-  for (const line of lines) {
-    const radii = line.map((point) => distance(point, centre));
-    const mean = radii.reduce((a, b) => a + b, 0) / radii.length;
-    for (const radius of radii) sum += (radius - mean) ** 2;
-    count += radii.length;
-  }
-  return Math.sqrt(sum / count);
+/** Degrees by which real rings stray from one pith's circles: near a stroke, and added for each half diagonal away from the nearest. */
+const strayDeg = { near: 1.5, away: 6 };
+/** A station whose angle is this uncertain has half the confidence. */
+const halfSureDeg = 8;
+
+function stationConfidence(
+  fit: RingFit,
+  strokes: Place[][],
+  position: number,
+  { widthMm, thicknessMm }: EndSize,
+  { halfMm }: EndFrame,
+): number {
+  const x = ((position - 0.5) * widthMm) / halfMm;
+  const quarter = thicknessMm / 4 / halfMm;
+  const fitted = [-quarter, 0, quarter].map((y) => (fit.directionSd({ x, y }) * 180) / Math.PI);
+  const away = Math.min(...strokes.flat().map((place) => Math.hypot(place.x - x, place.y)));
+  const off = Math.hypot(Math.max(...fitted), strayDeg.near + strayDeg.away * away);
+  return 1 / (1 + (off / halfSureDeg) ** 2);
 }
 
-/** Mean direction of the strokes as lines without a sense, weighted by length; positive falls to the right. */
-function meanDirectionDeg(lines: PointMm[][]): number {
-  let [cosine, sine] = [0, 0];
-  for (const line of lines) {
-    const [a, b] = [line[0] as PointMm, line.at(-1) as PointMm];
-    const angle = 2 * Math.atan2(b.yMm - a.yMm, b.xMm - a.xMm);
-    const length = distance(a, b);
-    cosine += length * Math.cos(angle);
-    sine += length * Math.sin(angle);
-  }
-  return (Math.atan2(sine, cosine) * 90) / Math.PI;
-}
-
-function farAlongNormal(from: PointMm, directionDeg: number, awayMm: number): PointMm {
-  const angle = (directionDeg * Math.PI) / 180;
-  return { xMm: from.xMm - 40 * awayMm * Math.sin(angle), yMm: from.yMm + 40 * awayMm * Math.cos(angle) };
-}
-
-/** How much the strokes say about a place across the width: all where one passes, less further off. */
-function nearness(lines: PointMm[][], xMm: number, widthMm: number): number {
-  const gap = Math.min(...lines.flat().map((point) => Math.abs(point.xMm - xMm)));
-  return 1 / (1 + (gap / (0.4 * widthMm)) ** 2);
-}
-
-function distance(a: PointMm, b: PointMm): number {
-  return Math.hypot(a.xMm - b.xMm, a.yMm - b.yMm);
+function doubts(strokeStrayMm: readonly number[], sure: number, noiseMm: number): string[] {
+  if (strokeStrayMm.length === 1) return ["One ring alone: draw another, well apart, to check it."];
+  const found = strokeStrayMm.flatMap((residual, i) =>
+    residual > 4 * noiseMm
+      ? [`Stroke ${i + 1} does not run with the others: it may follow a ray or a saw mark instead of a ring.`]
+      : [],
+  );
+  if (found.length === strokeStrayMm.length)
+    return ["The strokes do not lie on rings round one pith: they may not follow growth rings."];
+  if (sure < 0.5) found.push("The strokes say little about parts of the end: draw one nearer each edge, and longer.");
+  return found;
 }

@@ -1,7 +1,7 @@
 import { href, Link } from "react-router";
 import { Card } from "#app/components/card.tsx";
 import { When } from "#app/components/when.tsx";
-import { stationShares } from "#app/core/rings/summary.ts";
+import { classShares } from "#app/core/rings/summary.ts";
 import type { Board } from "#app/domain/boards/board.ts";
 import { EndDrawing } from "#app/domain/boards/end-drawing.tsx";
 import { useShop } from "#app/domain/shop/shop-view.tsx";
@@ -44,7 +44,7 @@ export function RingCard({ board, readings, mayRead }: RingCardProps) {
 function EndReading({ board, reading }: { board: Board; reading: RingReading }) {
   const { classLimits } = useShop();
   const { field } = reading;
-  const shares = stationShares(field, classLimits);
+  const shares = classShares(field, classLimits);
   const width = 900;
   const height = (width * field.thicknessMm) / field.widthMm;
   const percent = (share: number) => `${Math.round(share * 100)} %`;

@@ -1,66 +1,48 @@
-import type { PointMm, RingField } from "./ring-types.ts";
+import { ringCurves } from "./ring-curves.ts";
+import type { RingField } from "./ring-types.ts";
+import { writeCurves } from "./svg-path.ts";
 
 export interface EndDrawingSize {
+  /** Of the drawing: pixels, or whatever its units are. */
   widthPx: number;
   heightPx: number;
   /** Rings closer than this are thinned out, so that they never run together. */
   minSpacingPx?: number;
+  /** Makes the rings uneven, as growth is, always alike for the same number. Without it they are even. */
+  seed?: number;
 }
 
 const mmPerInch = 25.4;
-
-/** Where rings of unknown centre are taken to be centred: so far off that they are straight across a board. */
-const farMm = 100_000;
+/** Drawn where nobody has counted: a spacing says nothing then, the direction all. */
+const plainRingsPerInch = 10;
 
 /**
- * The rings of a board's end as one SVG path, arcs round the pith at the recorded spacing.
+ * The rings of a board's end as SVG paths, one for each ring, from the pith outwards: arcs round the pith at the recorded spacing, or lines along the
+ * directions read where there is no pith. Where the rings stand too close for the size, every second, third … is drawn. The paths run on a little
+ * past the rectangle: clip them to it. Their numbers are rounded to a twelfth of the least spacing or finer.
  *
- * @returns a `d` attribute in pixels of the drawing; clip it to the rectangle.
+ * @returns `d` attributes, in the drawing's units from its top left corner. RangeError for a field with neither pith nor station.
  */
-export function ringPath(field: RingField, { widthPx, heightPx, minSpacingPx = 3 }: EndDrawingSize): string {
-  const scaleX = widthPx / field.widthMm;
-  const scaleY = heightPx / field.thicknessMm;
-  const pith = field.pith ?? farPith(field);
-  const corners = [
-    [0, 0],
-    [field.widthMm, 0],
-    [field.widthMm, field.thicknessMm],
-    [0, field.thicknessMm],
-  ] as const;
-  const radii = corners.map(([x, y]) => Math.hypot(x - pith.xMm, y - pith.yMm));
-  const inside = pith.xMm >= 0 && pith.xMm <= field.widthMm && pith.yMm >= 0 && pith.yMm <= field.thicknessMm;
-  const nearest = inside
-    ? 0
-    : Math.hypot(
-        Math.max(-pith.xMm, 0, pith.xMm - field.widthMm),
-        Math.max(-pith.yMm, 0, pith.yMm - field.thicknessMm),
-      );
-  const farthest = Math.max(...radii);
-  const ringMm = mmPerInch / (field.ringsPerInch ?? 10);
-  const spacing = Math.max(ringMm, minSpacingPx / Math.min(scaleX, scaleY));
-  const middle = Math.atan2(field.thicknessMm / 2 - pith.yMm, field.widthMm / 2 - pith.xMm);
-  const spread = inside
-    ? Math.PI
-    : Math.max(...corners.map(([x, y]) => Math.abs(turn(Math.atan2(y - pith.yMm, x - pith.xMm) - middle))));
-  let d = "";
-  for (let r = Math.ceil(nearest / spacing) * spacing; r < farthest; r += spacing) {
-    if (r === 0) continue;
-    const point = (angle: number) =>
-      `${((pith.xMm + r * Math.cos(angle)) * scaleX).toFixed(1)} ${((pith.yMm + r * Math.sin(angle)) * scaleY).toFixed(1)}`;
-    const radius = `${(r * scaleX).toFixed(1)} ${(r * scaleY).toFixed(1)}`;
-    const from = middle - Math.min(spread, Math.PI * 0.999);
-    const to = middle + Math.min(spread, Math.PI * 0.999);
-    d += `M${point(from)}A${radius} 0 ${to - from > Math.PI ? 1 : 0} 1 ${point(to)}`;
-  }
-  return d;
+export function ringPaths(field: RingField, size: EndDrawingSize): string[] {
+  return drawn(field, size, (rings, write) => rings.map((pieces) => write([pieces])));
 }
 
-function farPith(field: RingField): PointMm {
-  const mean = field.stations.reduce((sum, station) => sum + station.signedDeg, 0) / Math.max(1, field.stations.length);
-  const along = (mean * Math.PI) / 180;
-  return { xMm: field.widthMm / 2 - farMm * Math.sin(along), yMm: field.thicknessMm / 2 + farMm * Math.cos(along) };
+/** The same as one path for all rings, in as few bytes as may be: a page draws some hundreds. */
+export function ringPath(field: RingField, size: EndDrawingSize): string {
+  return drawn(field, size, (rings, write) => write(rings));
 }
 
-function turn(angle: number): number {
-  return Math.atan2(Math.sin(angle), Math.cos(angle));
+type Rings = ReturnType<typeof ringCurves>;
+
+function drawn<T>(
+  field: RingField,
+  { widthPx, heightPx, minSpacingPx = 3, seed }: EndDrawingSize,
+  make: (rings: Rings, write: (rings: Rings) => string) => T,
+): T {
+  const scale = { x: widthPx / field.widthMm, y: heightPx / field.thicknessMm };
+  const ringMm = mmPerInch / (field.ringsPerInch ?? plainRingsPerInch);
+  const leastMm = minSpacingPx / Math.min(scale.x, scale.y);
+  const spacingMm = ringMm * Math.max(1, Math.ceil(leastMm / ringMm - 1e-9));
+  const rings = ringCurves(field, { spacingMm, seed, bleedMm: leastMm / 2 });
+  return make(rings, (some) => writeCurves(some.flat(), scale, minSpacingPx));
 }

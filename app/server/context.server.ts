@@ -3,6 +3,7 @@ import type { Logger } from "pino";
 import { createContext } from "react-router";
 import type { Actor } from "#app/domain/shop/actor.ts";
 import type { ShopSettings } from "#app/domain/shop/shop.ts";
+import type { Mailer } from "#app/services/mail.server.ts";
 import type { Storage } from "#app/services/storage.server.ts";
 
 /** The database handle for this request. Tests hand in a transaction. */
@@ -10,6 +11,9 @@ export const dbContext = createContext<Knex>();
 
 /** Where files are kept. */
 export const storageContext = createContext<Storage>();
+
+/** How letters are sent. */
+export const mailerContext = createContext<Mailer>();
 
 /** The request's own log: every line carries the request id. */
 export const logContext = createContext<Logger>();

@@ -1,7 +1,7 @@
-import { data, type RouterContextProvider } from "react-router";
+import { data, href, type RouterContextProvider, redirect } from "react-router";
 import { actorCan } from "#app/domain/shop/actor.ts";
 import type { Permission } from "#app/domain/shop/permissions.ts";
-import { type AtWork, atWorkContext } from "./context.server.ts";
+import { type AtWork, atWorkContext, type Visit, visitContext } from "./context.server.ts";
 
 /**
  * The first line of every loader and action of a shop: who is at work, in which shop, and whether their role may do this.
@@ -22,4 +22,11 @@ export function notHere(): never {
 /** Narrows what a query found, or answers 404. */
 export function requireFound<T>(found: T | null | undefined): T {
   return found ?? notHere();
+}
+
+/** For pages of a person, not of a shop: who is signed in. A stranger signs in and comes back. */
+export function requireVisit(context: Readonly<RouterContextProvider>, url: URL): Visit {
+  const visit = context.get(visitContext);
+  if (!visit) throw redirect(`${href("/sign-in")}?${new URLSearchParams({ to: url.pathname + url.search })}`);
+  return visit;
 }

@@ -1,5 +1,7 @@
 import type { Knex } from "knex";
+import type { Actor } from "#app/domain/shop/actor.ts";
 import type { Role } from "#app/domain/shop/permissions.ts";
+import { newId } from "#app/services/ids.server.ts";
 
 /** What a person is in a shop, or null when they have no business there. */
 export async function membershipOf(
@@ -11,4 +13,101 @@ export async function membershipOf(
     .where({ person_id: personId, shop_id: shopId })
     .first({ shopId: "shop_id", role: "role" });
   return row ?? null;
+}
+
+/** The person with this address, lower-cased, written down if new. Two first sign-ins at once give one person. */
+export async function personByEmail(db: Knex, email: string): Promise<string> {
+  await db("people").insert({ id: newId(), email }).onConflict("email").ignore();
+  const row = await db("people").where({ email }).first("id");
+  return row.id;
+}
+
+/** What a person is called. */
+export async function renamePerson(db: Knex, personId: string, name: string): Promise<void> {
+  await db("people").where({ id: personId }).update({ name });
+}
+
+export interface ShopOfPerson {
+  id: string;
+  name: string;
+  role: Role;
+}
+
+/** The shops somebody works in, by name. */
+export async function shopsOf(db: Knex, personId: string): Promise<ShopOfPerson[]> {
+  return db("memberships as m")
+    .join("shops as s", "s.id", "m.shop_id")
+    .where("m.person_id", personId)
+    .orderBy("s.name")
+    .select({ id: "s.id", name: "s.name", role: "m.role" });
+}
+
+/** The shop to begin in: the one of the newest other session, else the first joined; null without any. */
+export async function lastShopOf(db: Knex, personId: string): Promise<string | null> {
+  const row = await db("memberships as m")
+    .leftJoin("sessions as s", (join) => join.on("s.shop_id", "m.shop_id").andOn("s.person_id", "m.person_id"))
+    .where("m.person_id", personId)
+    .orderByRaw("s.last_seen_at IS NULL, s.last_seen_at DESC, m.created_at")
+    .first("m.shop_id");
+  return row?.shop_id ?? null;
+}
+
+export interface Member {
+  personId: string;
+  name: string;
+  email: string;
+  role: Role;
+  joinedAt: Date;
+}
+
+/** Who works in the actor's shop, owners first. */
+export async function listMembers(db: Knex, actor: Pick<Actor, "shopId">): Promise<Member[]> {
+  return db("memberships as m")
+    .join("people as p", "p.id", "m.person_id")
+    .where("m.shop_id", actor.shopId)
+    .orderByRaw("FIELD(m.role, 'owner', 'maker', 'helper'), p.name, p.email")
+    .select({ personId: "p.id", name: "p.name", email: "p.email", role: "m.role", joinedAt: "m.created_at" });
+}
+
+export interface Invitation {
+  id: string;
+  email: string;
+  role: Role;
+  expiresAt: Date;
+}
+
+/** Invitations not yet accepted nor out of date. */
+export async function listInvitations(db: Knex, actor: Pick<Actor, "shopId">, now: Date): Promise<Invitation[]> {
+  return db("invitations")
+    .where({ shop_id: actor.shopId })
+    .whereNull("accepted_at")
+    .where("expires_at", ">", now)
+    .orderBy("email")
+    .select({ id: "id", email: "email", role: "role", expiresAt: "expires_at" });
+}
+
+export interface OwnSession {
+  id: string;
+  userAgent: string;
+  createdAt: Date;
+  lastSeenAt: Date;
+}
+
+/** Where somebody is signed in, newest use first. */
+export async function sessionsOf(db: Knex, personId: string, now: Date): Promise<OwnSession[]> {
+  return db("sessions")
+    .where({ person_id: personId })
+    .where("expires_at", ">", now)
+    .orderBy("last_seen_at", "desc")
+    .select({ id: "id", userAgent: "user_agent", createdAt: "created_at", lastSeenAt: "last_seen_at" });
+}
+
+/** Ends one of a person's own sessions; a stranger's is left alone. */
+export async function endSessionOf(db: Knex, personId: string, sessionId: string): Promise<boolean> {
+  return (await db("sessions").where({ id: sessionId, person_id: personId }).delete()) === 1;
+}
+
+/** Ends all of a person's sessions but one. */
+export async function endOtherSessions(db: Knex, personId: string, keepId: string): Promise<number> {
+  return db("sessions").where({ person_id: personId }).whereNot({ id: keepId }).delete();
 }

@@ -1,4 +1,5 @@
 import type { Knex } from "knex";
+import type { ShopForm } from "./shop.schema.ts";
 import type { ShopSettings } from "./shop.ts";
 
 const columns = {
@@ -36,4 +37,16 @@ export async function getShop(db: Knex, shopId: string): Promise<ShopSettings | 
   if (!row) return null;
   const { flatBelowDeg, quarteredAboveDeg, ...rest } = row;
   return { ...rest, classLimits: { flatBelowDeg, quarteredAboveDeg } };
+}
+
+/** Saves settings made from the given version; false when they have changed since. */
+export async function updateShop(db: Knex, shopId: string, version: number, form: ShopForm): Promise<boolean> {
+  const row = Object.fromEntries(
+    (Object.keys(form) as (keyof ShopForm)[]).map((field) => [columns[field], form[field]]),
+  );
+  return (
+    (await db("shops")
+      .where({ id: shopId, version })
+      .update({ ...row, version: version + 1 })) === 1
+  );
 }

@@ -1,0 +1,29 @@
+import type { Knex } from "knex";
+import type { ClassLimits, RingClass, RingField } from "#app/core/rings/ring-types.ts";
+import { dominantClass } from "#app/core/rings/summary.ts";
+import type { Actor } from "#app/domain/shop/actor.ts";
+
+const block = 2_000;
+
+/** Classes every read board of a shop anew under other limits, a block at a time. The readings themselves do not change. */
+export async function reclassBoards(trx: Knex, actor: Pick<Actor, "shopId">, limits: ClassLimits): Promise<void> {
+  let after = "";
+  for (;;) {
+    const rows: { id: string; ring_class: RingClass; ring_field: string }[] = await trx("boards")
+      .where({ shop_id: actor.shopId })
+      .whereNotNull("ring_field")
+      .where("id", ">", after)
+      .orderBy("id")
+      .limit(block)
+      .select("id", "ring_class", "ring_field");
+    if (rows.length === 0) return;
+    after = rows.at(-1)?.id ?? "";
+    const moved = new Map<RingClass, string[]>();
+    for (const row of rows) {
+      const ringClass = dominantClass(JSON.parse(row.ring_field) as RingField, limits);
+      if (ringClass !== row.ring_class) moved.set(ringClass, [...(moved.get(ringClass) ?? []), row.id]);
+    }
+    for (const [ringClass, ids] of moved)
+      await trx("boards").where({ shop_id: actor.shopId }).whereIn("id", ids).update({ ring_class: ringClass });
+  }
+}

@@ -1,7 +1,8 @@
 import { type ClaimCompared, chargeMinor, compareClaim } from "#app/core/measure/claim.ts";
 import type { MeasuredBoard } from "#app/core/measure/measured-board.ts";
 import { type Tally, tally } from "#app/core/measure/tally.ts";
-import type { Delivery, VolumeUnit } from "./delivery.ts";
+import type { VolumeUnit } from "#app/core/measure/volume-units.ts";
+import type { Delivery } from "./delivery.ts";
 import { shareOut } from "./share-cost.ts";
 
 type Priced = Pick<Delivery, "claimedVolume" | "claimedUnit" | "priceMinor" | "priceBasis" | "freightMinor">;

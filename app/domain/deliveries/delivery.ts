@@ -1,10 +1,10 @@
+import type { VolumeUnit } from "#app/core/measure/volume-units.ts";
+
 export const dryings = ["kiln", "air", "green"] as const;
 export type Drying = (typeof dryings)[number];
 
 export const priceBases = ["bf", "m3", "lump"] as const;
 export type PriceBasis = (typeof priceBases)[number];
-
-export type VolumeUnit = "bf" | "m3";
 
 /** A delivery as the supplier claims it and the shop received it. Its boards are a lot. */
 export interface Delivery {
@@ -32,13 +32,4 @@ export interface Delivery {
 
 export interface DeliverySummary extends Delivery {
   boards: number;
-}
-
-export interface DeliveryDocument {
-  id: string;
-  name: string;
-  contentType: string;
-  bytes: number;
-  addedBy: string;
-  addedAt: Date;
 }

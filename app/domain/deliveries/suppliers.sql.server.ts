@@ -1,7 +1,7 @@
 import type { Knex } from "knex";
-import { z } from "zod";
 import type { Actor } from "#app/domain/shop/actor.ts";
 import { newId } from "#app/services/ids.server.ts";
+import type { SupplierForm } from "./supplier.schema.ts";
 
 type ByShop = Pick<Actor, "shopId">;
 
@@ -14,31 +14,24 @@ export interface Supplier {
   version: number;
 }
 
-/** A supplier as typed. */
-export const supplierForm = z.object({
-  name: z
-    .string({ error: "Name the supplier." })
-    .trim()
-    .min(1, "Name the supplier.")
-    .max(120, "At most 120 characters."),
-  email: z.union([z.literal(""), z.email("That is not an e-mail address.")]).default(""),
-  phone: z.string().trim().max(40, "At most 40 characters.").default(""),
-  notes: z.string().trim().max(4000, "At most 4,000 characters.").default(""),
-});
-
-export type SupplierForm = z.infer<typeof supplierForm>;
+export interface SupplierSummary extends Supplier {
+  deliveries: number;
+  /** YYYY-MM-DD of the newest delivery, or null. */
+  lastReceivedOn: string | null;
+}
 
 const columns = ["id", "name", "email", "phone", "notes", "version"] as const;
 
-/** The shop's suppliers by name, each with how many deliveries came from it. */
-export async function listSuppliers(db: Knex, actor: ByShop): Promise<(Supplier & { deliveries: number })[]> {
+/** The shop's suppliers by name, each with how many deliveries came from it and when the last one did. */
+export async function listSuppliers(db: Knex, actor: ByShop): Promise<SupplierSummary[]> {
   return db("suppliers as s")
-    .leftJoin("deliveries as d", "d.supplier_id", "s.id")
+    .leftJoin("deliveries as d", (join) => join.on("d.supplier_id", "s.id").andOnNull("d.deleted_at"))
     .where("s.shop_id", actor.shopId)
     .groupBy("s.id")
     .orderBy("s.name")
     .select(columns.map((column) => `s.${column}`))
-    .count({ deliveries: "d.id" }) as never;
+    .count({ deliveries: "d.id" })
+    .max({ lastReceivedOn: "d.received_on" }) as never;
 }
 
 /** One supplier, or null. */
@@ -63,13 +56,27 @@ export async function supplierNamed(db: Knex, actor: ByShop, name: string): Prom
 /** Saves a supplier made from the given version; false when it has changed since. @throws duplicate key suppliers_name. */
 export async function updateSupplier(
   db: Knex,
-  actor: ByShop,
+  actor: Pick<Actor, "shopId" | "personId">,
   supplierId: string,
   version: number,
   form: SupplierForm,
+  now: Date,
 ): Promise<boolean> {
   const changed = await db("suppliers")
     .where({ id: supplierId, shop_id: actor.shopId, version })
-    .update({ ...form, version: version + 1 });
+    .update({ ...form, changed_by: actor.personId, changed_at: now, version: version + 1 });
   return changed === 1;
+}
+
+/** Who changed a supplier last, and when; nulls when nobody has since it was added. */
+export async function lastSupplierChange(
+  db: Knex,
+  actor: ByShop,
+  supplierId: string,
+): Promise<{ byName: string | null; at: Date | null; version: number } | null> {
+  const row = await db("suppliers as s")
+    .leftJoin("people as p", "p.id", "s.changed_by")
+    .where({ "s.id": supplierId, "s.shop_id": actor.shopId })
+    .first({ byName: "p.name", at: "s.changed_at", version: "s.version" });
+  return row ?? null;
 }

@@ -9,9 +9,7 @@ import { newId } from "#app/services/ids.server.ts";
 import { getDelivery } from "./deliveries.sql.server.ts";
 import type { Delivery } from "./delivery.ts";
 import { boardCostsMinor } from "./delivery-cost.ts";
-import type { TallyLine } from "./tally.ts";
-
-export const mostBoardsAtOnce = 2_000;
+import { mostBoardsAtOnce, type TallyLine } from "./tally.ts";
 
 export type TallySaved =
   | { ok: true; boardIds: string[]; firstTag: string; lastTag: string }

@@ -35,6 +35,8 @@ export type ReadRow =
 /** More rows than a lorry holds: somebody pasted the wrong thing. */
 export const mostRows = 1_000;
 export const mostBoardsPerRow = 500;
+/** Boards that one tally makes at most: they are made in one transaction. */
+export const mostBoardsAtOnce = 2_000;
 
 const sizes = { leastWidthMm: 10, mostWidthMm: 1_500, leastLengthMm: 50, mostLengthMm: 12_000 };
 

@@ -1,10 +1,11 @@
 import type { Knex } from "knex";
 import { writeEvent } from "#app/domain/boards/board-events.server.ts";
 import { getBoard } from "#app/domain/boards/boards.sql.server.ts";
+import { readUpload } from "#app/domain/files/read-upload.server.ts";
 import type { Actor } from "#app/domain/shop/actor.ts";
 import { withTransaction } from "#app/services/db.server.ts";
 import { newId } from "#app/services/ids.server.ts";
-import { FileTooLargeError, newStorageKey, type PresignedPut, type Storage } from "#app/services/storage.server.ts";
+import { newStorageKey, type PresignedPut, type Storage } from "#app/services/storage.server.ts";
 import { inspectPicture } from "./inspect-picture.server.ts";
 import { mostPhotoBytes, type PhotoKind, type PhotoRefusal } from "./photo.ts";
 import {
@@ -30,7 +31,7 @@ export async function beginPhoto(
   actor: Actor,
   photo: { boardId: string; kind: PhotoKind; bytes: number; contentType: string },
   now: Date,
-): Promise<{ photoId: string; put: PresignedPut } | null> {
+): Promise<{ id: string; put: PresignedPut } | null> {
   if (!(await getBoard(db, actor, photo.boardId))) return null;
   await sweepStale(db, storage, actor, now);
   const waiting: WaitingPhoto = {
@@ -41,7 +42,7 @@ export async function beginPhoto(
   };
   const put = await storage.presignPut(waiting.uploadKey, { bytes: photo.bytes, contentType: photo.contentType });
   await insertWaitingPhoto(db, actor, waiting);
-  return { photoId: waiting.id, put };
+  return { id: waiting.id, put };
 }
 
 export type PhotoConfirmed =
@@ -55,7 +56,7 @@ export type PhotoConfirmed =
 export async function confirmPhoto(db: Knex, storage: Storage, actor: Actor, photoId: string): Promise<PhotoConfirmed> {
   const waiting = await getWaitingPhoto(db, actor, photoId);
   if (!waiting) return { ok: false, why: "missing" };
-  const arrived = await readUpload(storage, waiting.uploadKey);
+  const arrived = await readUpload(storage, waiting.uploadKey, mostPhotoBytes);
   if (!arrived.ok) {
     // One that has not arrived may still: its row waits for another try.
     if (arrived.why !== "not arrived") await drop(db, storage, actor, waiting);
@@ -87,22 +88,6 @@ export async function confirmPhoto(db: Knex, storage: Storage, actor: Actor, pho
   if (!first) await Promise.all(Object.values(keys).map((key) => storage.delete(key)));
   await storage.delete(waiting.uploadKey);
   return { ok: true, photoId, boardId: waiting.boardId };
-}
-
-async function readUpload(
-  storage: Storage,
-  key: string,
-): Promise<{ ok: true; bytes: Uint8Array } | { ok: false; why: PhotoRefusal }> {
-  const head = await storage.head(key);
-  if (!head) return { ok: false, why: "not arrived" };
-  if (head.bytes > mostPhotoBytes) return { ok: false, why: "too large" };
-  try {
-    const bytes = await storage.read(key, mostPhotoBytes);
-    return bytes ? { ok: true, bytes } : { ok: false, why: "not arrived" };
-  } catch (error) {
-    if (error instanceof FileTooLargeError) return { ok: false, why: "too large" };
-    throw error;
-  }
 }
 
 async function drop(db: Knex, storage: Storage, actor: Actor, waiting: WaitingPhoto): Promise<void> {

@@ -34,7 +34,9 @@ export const securityHeaders: MiddlewareFunction<Response> = async ({ context },
   context.set(nonceContext, nonce);
   const response = await next();
   const { headers } = response;
-  headers.set("Content-Security-Policy", contentSecurityPolicy(nonce, env()));
+  // A file handed out has a stricter one of its own.
+  if (!headers.has("Content-Security-Policy"))
+    headers.set("Content-Security-Policy", contentSecurityPolicy(nonce, env()));
   headers.set("Referrer-Policy", "same-origin");
   headers.set("X-Content-Type-Options", "nosniff");
   headers.set("Permissions-Policy", "camera=(self), microphone=(), geolocation=()");

@@ -10,7 +10,7 @@ const testSettings = {
   LOG_LEVEL: "silent",
   PUBLIC_URL: "http://rack.example",
   DATABASE_URL: "mysql://nobody@127.0.0.1:1/none",
-  SESSION_SECRETS: "a secret that is only for tests, and long enough",
+  SESSION_SECRETS: "a secret that is only for tests and is long enough",
   S3_ENDPOINT: "http://files.example",
   S3_BUCKET: "tests",
   S3_ACCESS_KEY_ID: "tests",

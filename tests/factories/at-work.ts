@@ -3,7 +3,15 @@ import { pino } from "pino";
 import { RouterContextProvider } from "react-router";
 import type { Actor } from "#app/domain/shop/actor.ts";
 import { getShop } from "#app/domain/shop/shops.sql.server.ts";
-import { atWorkContext, dbContext, logContext, storageContext, visitContext } from "#app/server/context.server.ts";
+import {
+  atWorkContext,
+  dbContext,
+  logContext,
+  mailerContext,
+  storageContext,
+  visitContext,
+} from "#app/server/context.server.ts";
+import type { Letter } from "#app/services/mail.server.ts";
 import type { Storage } from "#app/services/storage.server.ts";
 
 /** The context that a loader or action would get from the real middleware, for somebody at work. */
@@ -23,6 +31,17 @@ export async function contextFor(db: Knex, actor: Actor, storage?: Storage): Pro
   });
   if (storage) context.set(storageContext, storage);
   return context;
+}
+
+/** The context of somebody who is not signed in, with a mailer that keeps its letters. */
+export function strangerContext(db: Knex): { context: RouterContextProvider; letters: Letter[] } {
+  const context = new RouterContextProvider();
+  const letters: Letter[] = [];
+  context.set(dbContext, db);
+  context.set(logContext, pino({ level: "silent" }));
+  context.set(visitContext, null);
+  context.set(mailerContext, { send: async (letter) => void letters.push(letter), close: () => {} });
+  return { context, letters };
 }
 
 /** What a loader or action threw or returned, as a status: a redirect's, data()'s, or 200 for a plain object. */

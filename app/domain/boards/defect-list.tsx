@@ -1,7 +1,7 @@
 import { Form, href, Link } from "react-router";
-import { Button } from "#app/components/button.tsx";
 import { Card } from "#app/components/card.tsx";
 import { toPanel } from "#app/components/panel.tsx";
+import { SureButton } from "#app/components/sure-button.tsx";
 import { speciesTints } from "#app/domain/species/species-tints.ts";
 import type { Board } from "./board.ts";
 import type { Defect } from "./defect.ts";
@@ -42,9 +42,9 @@ export function DefectList({ board, defects, mayNote }: DefectListProps) {
                 {mayNote ? (
                   <Form method="post" action={href("/boards/:boardId/defects", { boardId: board.id })}>
                     <input type="hidden" name="remove" value={defect.id} />
-                    <Button look="quiet" aria-label={`Remove ${defect.kind}`}>
+                    <SureButton look="quiet" aria-label={`Remove ${defect.kind}`} sure="Press again to remove">
                       Remove
-                    </Button>
+                    </SureButton>
                   </Form>
                 ) : null}
               </li>

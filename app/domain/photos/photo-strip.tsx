@@ -1,6 +1,6 @@
 import { Form, href, Link } from "react-router";
-import { Button } from "#app/components/button.tsx";
 import { Card } from "#app/components/card.tsx";
+import { SureButton } from "#app/components/sure-button.tsx";
 import { When } from "#app/components/when.tsx";
 import { AddPhoto } from "./add-photo.tsx";
 import type { Photo } from "./photo.ts";
@@ -52,9 +52,9 @@ export function PhotoStrip({ boardId, tag, photos, mayRemove }: PhotoStripProps)
                   method="post"
                   action={href("/boards/:boardId/photos/:photoId/remove", { boardId, photoId: photo.id })}
                 >
-                  <Button look="quiet" aria-label={`Remove ${photo.kind} photo`}>
+                  <SureButton look="quiet" aria-label={`Remove ${photo.kind} photo`} sure="Press again to remove">
                     Remove
-                  </Button>
+                  </SureButton>
                 </Form>
               ) : null}
             </div>

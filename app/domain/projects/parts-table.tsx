@@ -1,7 +1,7 @@
 import { Form, href, Link } from "react-router";
-import { Button } from "#app/components/button.tsx";
 import { Card } from "#app/components/card.tsx";
 import { toPanel } from "#app/components/panel.tsx";
+import { SureButton } from "#app/components/sure-button.tsx";
 import { LengthText } from "#app/domain/boards/size-text.tsx";
 import { speciesName } from "#app/domain/species/species-tints.ts";
 import type { Part } from "./project.ts";
@@ -48,9 +48,9 @@ export function PartsTable({ parts, projectId, mayChange }: PartsTableProps) {
               {mayChange ? (
                 <Form method="post" action={href("/projects/:projectId/parts", { projectId })}>
                   <input type="hidden" name="remove" value={part.id} />
-                  <Button look="quiet" aria-label={`Remove ${part.name}`}>
+                  <SureButton look="quiet" aria-label={`Remove ${part.name}`} sure="Press again to remove">
                     Remove
-                  </Button>
+                  </SureButton>
                 </Form>
               ) : null}
             </li>

@@ -4,6 +4,7 @@ import { Button } from "#app/components/button.tsx";
 import { Card, PageHead } from "#app/components/card.tsx";
 import { SelectField, TextField } from "#app/components/field.tsx";
 import { Notice } from "#app/components/notice.tsx";
+import { SureButton } from "#app/components/sure-button.tsx";
 import { printDay } from "#app/components/when.tsx";
 import { inviteForm } from "#app/domain/people/people.schema.ts";
 import { changeMember, invite, revokeInvitation } from "#app/domain/people/people.server.ts";
@@ -138,14 +139,15 @@ function MemberRow({ member, isMe }: { member: Member; isMe: boolean }) {
         <Button name="intent" value="role">
           Change
         </Button>
-        <Button
+        <SureButton
           look="danger"
+          sure="Press again to remove"
           name="intent"
           value="remove"
           aria-label={`Remove ${member.name || member.email} from the shop`}
         >
           Remove
-        </Button>
+        </SureButton>
       </Form>
     </li>
   );

@@ -6,7 +6,7 @@ import { TextField } from "#app/components/field.tsx";
 import { fieldProps } from "#app/components/form-field.ts";
 import { FrontDoor } from "#app/components/front-door.tsx";
 import { signInForm } from "#app/domain/people/people.schema.ts";
-import { dbContext, mailerContext, visitContext } from "#app/server/context.server.ts";
+import { dbContext, logContext, mailerContext, visitContext } from "#app/server/context.server.ts";
 import { mailCode } from "#app/server/sign-in/authenticator.server.ts";
 import { mayMail } from "#app/server/sign-in/limits.server.ts";
 import { localPath } from "#app/server/sign-in/pending.server.ts";
@@ -28,7 +28,15 @@ export async function action({ request, context }: Route.ActionArgs) {
     const formErrors = ["Too many codes were asked for. Use the newest letter, or wait a quarter of an hour."];
     return data({ result: submission.reply({ formErrors }) }, { status: 429 });
   }
-  return mailCode(services, request, email, localPath(to));
+  try {
+    return await mailCode(services, request, email, localPath(to));
+  } catch (error) {
+    context.get(logContext).error({ err: error }, "a sign-in letter could not be sent");
+    return data(
+      { result: submission.reply({ formErrors: ["The letter could not be sent just now. Try again in a minute."] }) },
+      { status: 503 },
+    );
+  }
 }
 
 export default function SignIn({ loaderData, actionData }: Route.ComponentProps) {

@@ -25,6 +25,7 @@ interface SignInServices {
 function authenticator(
   { db, mailer, now }: SignInServices,
   begin: { to: string; onOpened: (pending: Pending) => void },
+  faults: unknown[],
 ) {
   const secure = env().PUBLIC_URL.startsWith("https:") ? (true as const) : undefined;
   const strategy = new TOTPStrategy<never>(
@@ -37,26 +38,39 @@ function authenticator(
       successRedirect: "/",
       failureRedirect: "/sign-in/code?wrong",
       async sendTOTP({ email, code }) {
-        const { id, token } = await openChallenge(db, email, code, now);
-        const link = `${env().PUBLIC_URL}/sign-in/link?${new URLSearchParams({ t: token, to: begin.to })}`;
-        await mailer.send(signInLetter(email, code, link));
-        begin.onOpened({ challengeId: id, email, to: begin.to });
+        await noting(faults, async () => {
+          const { id, token } = await openChallenge(db, email, code, now);
+          const link = `${env().PUBLIC_URL}/sign-in/link?${new URLSearchParams({ t: token, to: begin.to })}`;
+          await mailer.send(signInLetter(email, code, link));
+          begin.onOpened({ challengeId: id, email, to: begin.to });
+        });
       },
     },
-    async ({ email, formData, request }) => {
-      const pending = await readPending(request);
-      const code = String(formData?.get("code") ?? "");
-      const right =
-        pending !== null &&
-        pending.email === email &&
-        (await consumeCode(db, { id: pending.challengeId, email, code }, now));
-      if (!right) throw redirect("/sign-in/code?wrong");
-      const done = await finishSignIn(db, request, email, pending.to, now);
-      done.headers.append("Set-Cookie", await forgetPending());
-      throw done;
-    },
+    ({ email, formData, request }) =>
+      noting(faults, async () => {
+        const pending = await readPending(request);
+        const code = String(formData?.get("code") ?? "");
+        const right =
+          pending !== null &&
+          pending.email === email &&
+          (await consumeCode(db, { id: pending.challengeId, email, code }, now));
+        if (!right) throw redirect("/sign-in/code?wrong");
+        const done = await finishSignIn(db, request, email, pending.to, now);
+        done.headers.append("Set-Cookie", await forgetPending());
+        throw done;
+      }),
   );
   return new Authenticator<never>().use(strategy, name);
+}
+
+/** The library takes every error for a wrong code. Ours are put aside, to be thrown once it has answered. */
+async function noting<T>(faults: unknown[], work: () => Promise<T>): Promise<T> {
+  try {
+    return await work();
+  } catch (error) {
+    if (!(error instanceof Response)) faults.push(error);
+    throw error;
+  }
 }
 
 /** A key for the library's own cookie, made from the first session secret so that there is one secret to keep. */
@@ -64,7 +78,7 @@ function secretKey(): string {
   return createHash("sha256").update(`totp ${env().SESSION_SECRETS[0]}`).digest("hex");
 }
 
-/** Mails a code to an address. @returns the answer: off to the page where the code is typed. The address is trimmed and lower-cased before. */
+/** Mails a code to an address, trimmed and in lower case. @returns the answer: off to the page where the code is typed. @throws when the letter cannot be sent. */
 export async function mailCode(
   services: SignInServices,
   request: Request,
@@ -73,13 +87,11 @@ export async function mailCode(
 ): Promise<Response> {
   let opened: Pending | undefined;
   const asked = new Request(request.url, { method: "POST", body: new URLSearchParams({ email }) });
-  const answer = await answerOf(() =>
-    authenticator(services, {
-      to,
-      onOpened: (pending) => {
-        opened = pending;
-      },
-    }).authenticate(name, asked),
+  const onOpened = (pending: Pending) => {
+    opened = pending;
+  };
+  const answer = await answerOf((faults) =>
+    authenticator(services, { to, onOpened }, faults).authenticate(name, asked),
   );
   if (opened) answer.headers.append("Set-Cookie", await keepPending(opened));
   return answer;
@@ -92,17 +104,17 @@ export async function judgeCode(services: SignInServices, request: Request, code
     body: new URLSearchParams({ code }),
     headers: { Cookie: request.headers.get("Cookie") ?? "", "User-Agent": request.headers.get("User-Agent") ?? "" },
   });
-  return answerOf(() => authenticator(services, { to: "/", onOpened: () => {} }).authenticate(name, asked));
+  return answerOf((faults) =>
+    authenticator(services, { to: "/", onOpened: () => {} }, faults).authenticate(name, asked),
+  );
 }
 
-/** The library answers by throwing. Its answers' headers are made writable. */
-async function answerOf(run: () => Promise<unknown>): Promise<Response> {
-  try {
-    await run();
-  } catch (answer) {
-    if (answer instanceof Response)
-      return new Response(answer.body, { status: answer.status, headers: new Headers(answer.headers) });
-    throw answer;
-  }
-  throw new Error("the sign-in library gave no answer");
+/** The library answers by throwing. Its answers' headers are made writable; a fault of ours is thrown as it was. */
+async function answerOf(run: (faults: unknown[]) => Promise<unknown>): Promise<Response> {
+  const faults: unknown[] = [];
+  const answer = await run(faults).catch((thrown: unknown) => thrown);
+  if (faults.length > 0) throw faults[0];
+  if (!(answer instanceof Response))
+    throw answer instanceof Error ? answer : new Error("the sign-in library gave no answer");
+  return new Response(answer.body, { status: answer.status, headers: new Headers(answer.headers) });
 }

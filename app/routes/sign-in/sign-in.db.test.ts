@@ -49,7 +49,11 @@ function browser(db: Knex, address = "203.0.113.7") {
     ask: (email: string, to = "/boards") => run(askForCode, "/sign-in", { email, to }),
     type: (code: string) => run(typeCode, "/sign-in/code", { code }),
     visit: () => readVisit(db, request("/rack"), new Date()),
-    newestCode: () => /code is (\d{6})/.exec(letters.at(-1)?.text ?? "")?.[1] ?? "",
+    newestCode() {
+      const code = /code is (\d{6})/.exec(letters.at(-1)?.text ?? "")?.[1];
+      if (!code) throw new Error("no code was mailed");
+      return code;
+    },
     newestLink: () => new URL(/https?:\S+/.exec(letters.at(-1)?.text ?? "")?.[0] ?? base),
   };
 }

@@ -41,7 +41,9 @@ function mean(over: Antiderivative, { thicknessMm }: EndSize, pith: PointMm, { f
 
 /** Carries an antiderivative from the quarter x, y > 0 of an integrand even in both to the whole plane. */
 function evenly(x: number, y: number, quarter: Antiderivative): number {
-  return Math.min(Math.abs(x), Math.abs(y)) < 1e-9 ? 0 : Math.sign(x) * Math.sign(y) * quarter(Math.abs(x), Math.abs(y));
+  return Math.min(Math.abs(x), Math.abs(y)) < 1e-9
+    ? 0
+    : Math.sign(x) * Math.sign(y) * quarter(Math.abs(x), Math.abs(y));
 }
 
 function angleOver(a: number, b: number): number {

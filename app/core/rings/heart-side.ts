@@ -1,3 +1,4 @@
+import { foldDeg } from "./angle.ts";
 import type { RingField } from "./ring-types.ts";
 
 /** Where the heart of the tree lies: beyond the top face as drawn, beyond the bottom face, or in the board itself. */
@@ -16,12 +17,13 @@ export function heartSide({ pith, widthMm, thicknessMm, stations }: RingField): 
     if (pith.yMm >= thicknessMm) return "bottom";
     return pith.xMm > 0 && pith.xMm < widthMm ? "inside" : null;
   }
-  const [first, last] = [stations[0], stations.at(-1)];
-  if (!first || !last) return null;
-  const turn = last.signedDeg - first.signedDeg;
-  const folded = turn - 180 * Math.round(turn / 180);
-  if (Math.abs(folded) < leastTurnDeg) return null;
-  return folded > 0 ? "bottom" : "top";
+  // Step by step, as rings that close round a near pith turn by more than 90 degrees from edge to edge.
+  const turn = stations.reduce((sum, { signedDeg }, i) => {
+    const before = stations[i - 1];
+    return before ? sum + foldDeg(signedDeg - before.signedDeg) : sum;
+  }, 0);
+  if (Math.abs(turn) < leastTurnDeg) return null;
+  return turn > 0 ? "bottom" : "top";
 }
 
 /**

@@ -44,6 +44,7 @@ export function ShopHeader({ shopName, personName, role, sees, find }: ShopHeade
           <Tab to="/boards">Boards</Tab>
           {sees.deliveries ? <Tab to="/deliveries">Deliveries</Tab> : null}
           <Tab to="/projects">Projects</Tab>
+          <Tab to="/calculators">Calculators</Tab>
         </nav>
         <div className="order-4 w-full md:order-2 md:ml-auto md:w-64">{find}</div>
       </div>

@@ -1,5 +1,5 @@
 import { axialMean, foldDeg } from "./angle.ts";
-import { ringDirection } from "./direction.ts";
+import { type RingDirection, ringDirection } from "./direction.ts";
 import type { PointMm, RingField } from "./ring-types.ts";
 
 /** A leg's section where it is cut from a board's end: its middle, its own width and thickness, and how far it is turned, clockwise as drawn. */
@@ -50,7 +50,10 @@ const acrossSection = 13;
  * The rings are continued beyond the board's edges where the section sticks out. RangeError for an end without a reading.
  */
 export function legGrain(field: RingField, leg: LegSection, straightFrom = straightFromDeg): LegGrain {
-  const direction = ringDirection(field);
+  return grainIn(ringDirection(field), leg, straightFrom);
+}
+
+function grainIn(direction: RingDirection, leg: LegSection, straightFrom: number): LegGrain {
   const inLeg = (u: number, v: number) => foldDeg(direction(placed(leg, u, v)) - leg.turnDeg);
   const steps = Array.from({ length: alongSide }, (_, i) => (2 * (i + 0.5)) / alongSide - 1);
   const toTop = (deg: number) => Math.abs(deg);
@@ -99,22 +102,29 @@ export interface LegTurn {
 
 /** The turn that puts the rings on the leg's diagonal, the stock it takes, and what its sides show then. RangeError for an end without a reading. */
 export function turnToDiagonal(field: RingField, leg: LegSection, straightFrom = straightFromDeg): LegTurn {
-  const { signedDeg } = legGrain(field, leg, straightFrom);
-  const off = signedDeg - 45;
-  return turned(field, leg, off - 90 * Math.ceil((off - 45) / 90), straightFrom);
+  const direction = ringDirection(field);
+  const off = grainIn(direction, leg, straightFrom).signedDeg - 45;
+  return turned(field, direction, leg, off - 90 * Math.ceil((off - 45) / 90), straightFrom);
 }
 
 /** The least turn, to half a degree, that makes all four sides straight, with its thinner stock; null where none does. */
 export function leastTurn(field: RingField, leg: LegSection, straightFrom = straightFromDeg): LegTurn | null {
+  const direction = ringDirection(field);
   for (let step = 0; step <= 90; step++)
     for (const turnDeg of step === 0 ? [0] : [step / 2, -step / 2]) {
-      const turn = turned(field, leg, turnDeg, straightFrom);
+      const turn = turned(field, direction, leg, turnDeg, straightFrom);
       if (turn.grain.isStraight) return turn;
     }
   return null;
 }
 
-function turned(field: RingField, leg: LegSection, turnDeg: number, straightFrom: number): LegTurn {
+function turned(
+  field: RingField,
+  direction: RingDirection,
+  leg: LegSection,
+  turnDeg: number,
+  straightFrom: number,
+): LegTurn {
   const section = { ...leg, turnDeg: leg.turnDeg + turnDeg };
   const angle = (section.turnDeg * Math.PI) / 180;
   const [cos, sin] = [Math.abs(Math.cos(angle)), Math.abs(Math.sin(angle))];
@@ -127,7 +137,7 @@ function turned(field: RingField, leg: LegSection, turnDeg: number, straightFrom
     stockThicknessMm,
     stockWidthMm,
     fitsBoard: within(xMm, stockWidthMm, field.widthMm) && within(yMm, stockThicknessMm, field.thicknessMm),
-    grain: legGrain(field, section, straightFrom),
+    grain: grainIn(direction, section, straightFrom),
   };
 }
 

@@ -1,5 +1,5 @@
-import { axialMean } from "./angle.ts";
-import { ringDirection } from "./direction.ts";
+import { axialMean, foldDeg } from "./angle.ts";
+import { type RingDirection, ringDirection } from "./direction.ts";
 import type { PointMm, RingField } from "./ring-types.ts";
 
 /** A piece of a ring as it crosses a board's end. */
@@ -119,24 +119,29 @@ function arcsInBox(centre: PointMm, radiusMm: number, box: Box): RingCurve[] {
 /** Rings without a pith: lines that follow the directions read across the width, at even distances along a line square to them in the middle. */
 function lines(field: RingField, box: Box, spacing: RingSpacing): RingCurve[][] {
   const direction = ringDirection(field);
-  const mean = (axialMean(field.stations.map(({ signedDeg }) => signedDeg)).signedDeg * Math.PI) / 180;
+  const meanDeg = axialMean(field.stations.map(({ signedDeg }) => signedDeg)).signedDeg;
+  const mean = (meanDeg * Math.PI) / 180;
   const along = { x: Math.cos(mean), y: Math.sin(mean) };
   const middle = { xMm: field.widthMm / 2, yMm: field.thicknessMm / 2 };
   const reach = Math.hypot(box.right - box.left, box.bottom - box.top);
+  const isStraight = field.stations.every(({ signedDeg }) => Math.abs(foldDeg(signedDeg - meanDeg)) < straightDeg);
+  const steps = isStraight ? 1 : walkSteps;
   return ringPlaces(-reach, reach, spacing).map((offset) => {
     const seed = { xMm: middle.xMm - offset * along.y, yMm: middle.yMm + offset * along.x };
-    const back = walked(direction, seed, -reach, mean);
-    return partsInBox([...back.reverse(), seed, ...walked(direction, seed, reach, mean)], box);
+    const back = walked(direction, seed, -reach, mean, steps);
+    return partsInBox([...back.reverse(), seed, ...walked(direction, seed, reach, mean, steps)], box);
   });
 }
 
 const walkSteps = 48;
+/** Rings that nowhere turn further than this from their mean are drawn as straight lines. */
+const straightDeg = 0.5;
 /** A walk never turns further than this from the mean direction, so that it always gets across. */
 const mostTurn = (65 * Math.PI) / 180;
 
 /** Points along a ring from a seed, one way as far as `reach` along the mean direction (midpoint steps). */
-function walked(direction: (point: PointMm) => number, seed: PointMm, reach: number, mean: number): PointMm[] {
-  const step = reach / walkSteps;
+function walked(direction: RingDirection, seed: PointMm, reach: number, mean: number, steps: number): PointMm[] {
+  const step = reach / steps;
   const moved = (from: PointMm, at: PointMm, by: number): PointMm => {
     const deg = direction(at);
     const turn = (deg * Math.PI) / 180 - mean;
@@ -146,7 +151,7 @@ function walked(direction: (point: PointMm) => number, seed: PointMm, reach: num
   };
   const points: PointMm[] = [];
   let at = seed;
-  for (let i = 0; i < walkSteps; i++) {
+  for (let i = 0; i < steps; i++) {
     at = moved(at, moved(at, at, step / 2), step);
     points.push(at);
   }

@@ -16,7 +16,7 @@ const deepest = 6;
 
 /**
  * Curves as one SVG path in as few bytes as may be: straight where straight is as good, a quadratic where that is, else an arc; relative, rounded, each
- * piece from whichever end writes shorter.
+ * piece from the end nearer to where the last one stopped.
  *
  * @param scale drawing units to the millimetre, across and down.
  * @param spacing between rings in drawing units: sets how fine the path has to be.
@@ -26,12 +26,11 @@ export function writeCurves(curves: RingCurve[], scale: Scale, spacing: number):
   const pen = { unit: 10 ** decimals, x: 0, y: 0 };
   let d = "";
   for (const curve of curves) {
-    const forth = written(curve, scale, spacing * fine, pen);
-    const back = written(reversed(curve), scale, spacing * fine, pen);
-    const shorter = back.d.length < forth.d.length ? back : forth;
-    d += shorter.d;
-    pen.x = shorter.x;
-    pen.y = shorter.y;
+    const away = (share: number) => {
+      const { xMm, yMm } = curve.at(share);
+      return Math.abs(xMm * scale.x - pen.x / pen.unit) + Math.abs(yMm * scale.y - pen.y / pen.unit);
+    };
+    d += written(away(1) < away(0) ? reversed(curve) : curve, scale, spacing * fine, pen);
   }
   return d;
 }
@@ -47,8 +46,8 @@ function reversed({ at, arc }: RingCurve): RingCurve {
   return { at: (share) => at(1 - share), arc: arc && { radiusMm: arc.radiusMm, turnRad: -arc.turnRad } };
 }
 
-function written(curve: RingCurve, scale: Scale, stray: number, from: Pen): { d: string; x: number; y: number } {
-  const pen = { ...from };
+/** One curve, and the pen moved to its end. */
+function written(curve: RingCurve, scale: Scale, stray: number, pen: Pen): string {
   const at = (share: number): Place => {
     const { xMm, yMm } = curve.at(share);
     return { x: xMm * scale.x, y: yMm * scale.y };
@@ -80,7 +79,7 @@ function written(curve: RingCurve, scale: Scale, stray: number, from: Pen): { d:
     }
   };
   piece(0, 1, 0);
-  return { d, x: pen.x, y: pen.y };
+  return d;
 }
 
 function quadratic(a: Place, control: Place, b: Place, t: number): Place {

@@ -1,4 +1,5 @@
 import { useId } from "react";
+import { describeEnd } from "#app/core/rings/describe.ts";
 import { ringPath } from "#app/core/rings/end-drawing.ts";
 import { speciesTints } from "#app/domain/species/species-tints.ts";
 import type { BoardSummary } from "./board.ts";
@@ -87,6 +88,6 @@ export function EndDrawing({ board, x, y, width, height, pxPerUnit = 1, decorati
 
 /** What the drawing shows, for those who cannot see it. */
 export function endWords(board: DrawnEnd): string {
-  if (!board.ringClass) return "end grain: not read yet";
-  return `end grain: ${board.ringClass}, ${Math.round(board.ringMinDeg ?? 0)}° to ${Math.round(board.ringMaxDeg ?? 0)}°`;
+  const { ringClass, ringMinDeg, ringMaxDeg } = board;
+  return describeEnd(ringClass && { ringClass, leastDeg: ringMinDeg ?? 0, greatestDeg: ringMaxDeg ?? 0 });
 }

@@ -1,6 +1,6 @@
 import { z } from "zod";
-import { type EndCorners, endPlane } from "#app/core/rings/perspective.ts";
-import { readStrokes, type StrokesResult } from "#app/core/rings/strokes.ts";
+import type { EndCorners } from "#app/core/rings/perspective.ts";
+import { readPhotoStrokes, type StrokesResult } from "#app/core/rings/strokes.ts";
 
 const point = z.object({ x: z.number().finite(), y: z.number().finite() });
 
@@ -36,12 +36,7 @@ function safeJson(text: string): unknown {
 
 /** Reads marks with the board's real size. The same on the page, while marking, and on the server, when they are kept. */
 export function readMarks(marks: RingMarks, board: { widthMm: number; thicknessMm: number }): StrokesResult {
-  const plane = endPlane(marks.corners as unknown as EndCorners, board);
-  if (!plane.ok) return plane;
-  return readStrokes(
-    marks.strokes.map((stroke) => stroke.map(plane.plane.toMm)),
-    board,
-  );
+  return readPhotoStrokes(marks.strokes, marks.corners as unknown as EndCorners, board);
 }
 
 /** Where the corners stand before anybody has moved them: a little inside the picture. */

@@ -7,5 +7,7 @@ cd "$(dirname "$0")/.."
 need_node
 need_package mariadbd mariadb-server
 need_package chromium chromium
+# Renders printed pages for the tests that look at them.
+need_package pdftoppm poppler-utils
 need_npm_packages
 exec node --import tsx scripts/test.ts

@@ -1,8 +1,9 @@
-import { fileURLToPath } from "node:url";
 import PDFDocument from "pdfkit";
 import QRCode from "qrcode";
 import { type LabelSheet, labelPlaces } from "#app/core/labels/label-sheets.ts";
 import type { BoardSummary } from "#app/domain/boards/board.ts";
+import atkinson from "../../../fonts/atkinson-hyperlegible-next-latin-400-normal.woff?inline";
+import bricolage from "../../../fonts/bricolage-grotesque-latin-700-normal.woff?inline";
 import { drawEnd } from "./pdf-end.server.ts";
 
 export interface TagText {
@@ -15,7 +16,9 @@ export interface TagText {
 }
 
 const ptPerMm = 72 / 25.4;
-const font = (name: string) => fileURLToPath(new URL(`../../../fonts/${name}`, import.meta.url));
+
+/** Fonts come into the server's build as data, so that no path has to be right where it runs. */
+const font = (dataUrl: string) => Buffer.from(dataUrl.slice(dataUrl.indexOf(",") + 1), "base64");
 
 /** QR modules kept free round the code (ISO/IEC 18004 asks for four). */
 const quietModules = 4;
@@ -31,8 +34,8 @@ export async function tagPdf(tags: TagText[], sheet: LabelSheet, skip: number): 
   const chunks: Uint8Array[] = [];
   pdf.on("data", (chunk: Uint8Array) => chunks.push(chunk));
   const done = new Promise<void>((resolve, reject) => pdf.on("end", resolve).on("error", reject));
-  pdf.registerFont("tag", font("bricolage-grotesque-latin-700-normal.woff"));
-  pdf.registerFont("text", font("atkinson-hyperlegible-next-latin-400-normal.woff"));
+  pdf.registerFont("tag", font(bricolage));
+  pdf.registerFont("text", font(atkinson));
   let page = -1;
   labelPlaces(sheet, tags.length, skip).forEach((place, index) => {
     const tag = tags[index];

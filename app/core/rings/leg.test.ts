@@ -77,6 +77,13 @@ describe("turning a leg within thicker stock", () => {
     expect(turnToDiagonal(fieldFromAngle(size, 0, "right"), square(10, 38)).fitsBoard).toBe(false);
   });
 
+  test("a section that is not square, 60 by 30 turned by 35 degrees, needs its own height and width", () => {
+    const turn = (35 * Math.PI) / 180;
+    const found = turnToDiagonal(fieldFromAngle(size, 10, "right"), { ...square(100, 60), thicknessMm: 30 });
+    expect(found.stockThicknessMm).toBeCloseTo(60 * Math.sin(turn) + 30 * Math.cos(turn), 6);
+    expect(found.stockWidthMm).toBeCloseTo(60 * Math.cos(turn) + 30 * Math.sin(turn), 6);
+  });
+
   test("only as far as all four sides need takes less: rings at 20 are straight from a turn of 10", () => {
     const found = leastTurn(fieldFromAngle(size, 20, "right"), square(100));
     expect(Math.abs(found!.turnDeg)).toBe(10);

@@ -63,6 +63,11 @@ export default [
       route("claim", "routes/calculators/claim.tsx"),
       route("air", "routes/calculators/air.tsx"),
       route("meter", "routes/calculators/meter.tsx"),
+      route("rings", "routes/calculators/rings.tsx"),
+      route("leg", "routes/calculators/leg.tsx"),
+      route("ready", "routes/calculators/ready.tsx"),
+      route("movement", "routes/calculators/movement.tsx"),
+      route("weight", "routes/calculators/weight.tsx"),
     ]),
     ...prefix("files", [
       route("boards.csv", "routes/files/boards-csv.ts"),

@@ -1,8 +1,8 @@
+import { Figures } from "#app/components/figures.tsx";
 import { Plot, PlotDot, type PlotMark } from "#app/components/plot.tsx";
 import { printTemperature } from "#app/domain/moisture/temperature.ts";
 import { useShop } from "#app/domain/shop/shop-view.tsx";
 import type { AirAnswer } from "./air.ts";
-import { Figures } from "./figures.tsx";
 
 /** The curve of moisture against humidity at one temperature, with what was asked marked on it. */
 export function AirResult({ answer }: { answer: AirAnswer }) {

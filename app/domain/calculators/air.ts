@@ -8,9 +8,9 @@ import {
 } from "#app/core/moisture/emc.ts";
 import { shopTarget } from "#app/core/moisture/interior-targets.ts";
 import { shopDegrees, temperatureField, typedTemperature } from "#app/domain/moisture/temperature.ts";
+import type { Source } from "#app/domain/sources/source.ts";
 import { type Asked, ask, inUnits, type ShopForCalculators } from "./ask.ts";
 import { optionalNumberField } from "./number-field.ts";
-import type { Source } from "./sources.ts";
 
 export type AirBox = "temperature" | "humidity" | "moisture";
 

@@ -3,9 +3,10 @@ import { Form, href, Link } from "react-router";
 import { Button } from "#app/components/button.tsx";
 import { Card, PageHead } from "#app/components/card.tsx";
 import { Notice } from "#app/components/notice.tsx";
+import type { Source } from "#app/domain/sources/source.ts";
+import { SourceList } from "#app/domain/sources/source-list.tsx";
 import type { Asked } from "./ask.ts";
 import type { Calculator } from "./calculators.ts";
-import { confidenceWords, type Source } from "./sources.ts";
 
 interface CalculatorPageProps<Name extends string, Answer> {
   calculator: Calculator;
@@ -93,18 +94,5 @@ function FormulaAndSources({ formula, sources }: { formula: string[]; sources: S
       <h3 className="mt-4 mb-1 font-semibold text-lg">Where it comes from</h3>
       <SourceList sources={sources} />
     </Card>
-  );
-}
-
-/** Sources with how well each is known. */
-export function SourceList({ sources }: { sources: Source[] }) {
-  return (
-    <ul className="grid gap-1.5">
-      {sources.map(({ of, text, confidence }) => (
-        <li key={`${of} ${text}`}>
-          {of}: {text} <span className="text-ink-soft">({confidenceWords(confidence)})</span>
-        </li>
-      ))}
-    </ul>
   );
 }

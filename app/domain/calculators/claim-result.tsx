@@ -1,8 +1,8 @@
+import { Figures } from "#app/components/figures.tsx";
 import type { VolumeUnit } from "#app/core/measure/volume-units.ts";
 import { printMoney } from "#app/domain/shop/money.ts";
 import { useShop } from "#app/domain/shop/shop-view.tsx";
 import type { ClaimAnswer } from "./claim.ts";
-import { Figures } from "./figures.tsx";
 
 /** The difference first, in volume and money; then what it is made of. */
 export function ClaimResult({ answer: { compared, tally, isGross, beyond } }: { answer: ClaimAnswer }) {

@@ -4,9 +4,9 @@ import { type ClaimCompared, compareClaim } from "#app/core/measure/claim.ts";
 import { kilnAllowancePct } from "#app/core/measure/kiln-allowance.ts";
 import { type Tally, type TallyLine, tally } from "#app/core/measure/tally.ts";
 import { moneyField } from "#app/domain/shop/money.ts";
+import type { Source } from "#app/domain/sources/source.ts";
 import { type Asked, ask, inUnits, type ShopForCalculators } from "./ask.ts";
 import { numberField } from "./number-field.ts";
-import type { Source } from "./sources.ts";
 
 export type ClaimBox = "quarters" | "boards" | "claimed" | "unit" | "tallied" | "allowance" | "price" | "basis";
 

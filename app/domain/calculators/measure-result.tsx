@@ -1,7 +1,7 @@
+import { Figures } from "#app/components/figures.tsx";
 import { mmPerFoot } from "#app/core/lengths/length-unit.ts";
 import { LengthText } from "#app/domain/boards/size-text.tsx";
 import { useShop } from "#app/domain/shop/shop-view.tsx";
-import { Figures } from "./figures.tsx";
 import type { MeasureAnswer } from "./measure.ts";
 
 /** The trade's figure first, then what it was before rounding, and the two other ways of counting. */

@@ -7,9 +7,9 @@ import { surfaceMeasureFt2 } from "#app/core/measure/surface-measure.ts";
 import { type Measure, tally } from "#app/core/measure/tally.ts";
 import { trueBoardFeet } from "#app/core/measure/true-volume.ts";
 import { lengthField, optionalLengthField } from "#app/domain/shop/length-field.ts";
+import type { Source } from "#app/domain/sources/source.ts";
 import { type Asked, ask, inUnits, type ShopForCalculators } from "./ask.ts";
 import { numberField } from "./number-field.ts";
-import type { Source } from "./sources.ts";
 
 export type MeasureBox = "quarters" | "width" | "widthFar" | "length" | "thickness" | "count" | "lengths";
 

@@ -1,7 +1,7 @@
+import { Figures } from "#app/components/figures.tsx";
 import { Plot, PlotDot, roundTicks } from "#app/components/plot.tsx";
 import { printTemperature, shopDegrees, temperatureUnit } from "#app/domain/moisture/temperature.ts";
 import { useShop } from "#app/domain/shop/shop-view.tsx";
-import { Figures } from "./figures.tsx";
 import type { MeterAnswer } from "./meter.ts";
 
 /** The corrected figure, and how it hangs on the wood's temperature. */

@@ -1,9 +1,9 @@
 import { z } from "zod";
 import { type CorrectedReading, correctMeterReading, type Meter } from "#app/core/moisture/meter.ts";
 import { optionalTemperatureField, temperatureField } from "#app/domain/moisture/temperature.ts";
+import type { Source } from "#app/domain/sources/source.ts";
 import { type Asked, ask, inUnits, type ShopForCalculators } from "./ask.ts";
 import { numberField } from "./number-field.ts";
-import type { Source } from "./sources.ts";
 
 export type MeterBox = "meter" | "reading" | "wood" | "calibration";
 

@@ -1,10 +1,12 @@
 import type { ReactNode } from "react";
-import { Card } from "#app/components/card.tsx";
-import { Facts } from "#app/components/facts.tsx";
-import { Notice } from "#app/components/notice.tsx";
+import { Card } from "./card.tsx";
+import { Facts } from "./facts.tsx";
+import { Notice } from "./notice.tsx";
 
 interface FiguresProps {
   title: ReactNode;
+  /** Beside the title: a link or a count. */
+  aside?: ReactNode;
   /** The one figure asked for, set large. */
   main?: { label: string; value: ReactNode };
   /** A plot or drawing, above the figures. */
@@ -16,9 +18,9 @@ interface FiguresProps {
 }
 
 /** One answer of a calculator or a card: drawing, the figure asked for, the figures behind it, and any caution on them. */
-export function Figures({ title, main, drawing, rows = [], beyond = [], children }: FiguresProps) {
+export function Figures({ title, aside, main, drawing, rows = [], beyond = [], children }: FiguresProps) {
   return (
-    <Card title={title}>
+    <Card title={title} aside={aside}>
       {main ? (
         <p className="mb-3">
           <span className="block text-ink-soft">{main.label}</span>

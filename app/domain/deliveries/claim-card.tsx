@@ -30,9 +30,9 @@ export function ClaimCard({ measured, groups, claim }: ClaimCardProps) {
             ? [
                 { label: "Difference", value: differenceWords(claim) },
                 {
-                  label: "Worth, at the price paid",
+                  label: "In money, freight apart",
                   value:
-                    claim.differenceMinor === null ? "no price given" : signedMoney(claim.differenceMinor, currency),
+                    claim.differenceMinor === null ? "no price given" : moneyWords(claim.differenceMinor, currency),
                 },
               ]
             : []),
@@ -45,8 +45,8 @@ export function ClaimCard({ measured, groups, claim }: ClaimCardProps) {
         ]}
       />
       <p className="mt-2 text-ink-soft text-sm">
-        Surface measure of each board in whole square feet, halves up and down in turn, times the nominal thickness.
-        Offcuts count with the board they came from.
+        As hardwood is tallied: lengths down to whole feet, the surface of each board in whole square feet, halves up
+        and down in turn, times the nominal thickness. Offcuts count with the board they came from.
       </p>
     </Card>
   );
@@ -60,9 +60,11 @@ export function differenceWords({ differenceVolume, differencePct, unit }: Claim
   return `${printVolume(Math.abs(differenceVolume), unit)} ${words} (${sign}${Math.abs(differencePct).toFixed(1)} %)`;
 }
 
-function signedMoney(minor: number, currency: string): string {
-  if (minor === 0) return printMoney(0, currency);
-  return `${minor < 0 ? "−" : "+"}${printMoney(Math.abs(minor), currency)}`;
+/** "$482.65 paid for wood that is not there". */
+function moneyWords(minor: number, currency: string): string {
+  if (minor === 0) return "none";
+  const amount = printMoney(Math.abs(minor), currency);
+  return minor < 0 ? `${amount} paid for wood that is not there` : `${amount} of wood not paid for`;
 }
 
 function Bars({ claim }: { claim: ClaimCompared }) {

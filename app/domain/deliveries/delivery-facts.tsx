@@ -1,7 +1,9 @@
 import { Card } from "#app/components/card.tsx";
 import { Facts } from "#app/components/facts.tsx";
+import { Notice } from "#app/components/notice.tsx";
 import { printDay } from "#app/components/when.tsx";
 import { printQuarters } from "#app/core/lengths/quarters.ts";
+import { sourceName, speciesByCode } from "#app/core/species/species.ts";
 import { printMoney } from "#app/domain/shop/money.ts";
 import { useShop } from "#app/domain/shop/shop-view.tsx";
 import { speciesName } from "#app/domain/species/species-tints.ts";
@@ -38,6 +40,7 @@ export function DeliveryFacts({ delivery, totalMinor, children }: DeliveryFactsP
             { label: "Certificate", value: delivery.certificate || "none" },
           ]}
         />
+        <TradeCaution species={delivery.species} />
         {delivery.notes ? <p className="mt-3 whitespace-pre-line break-words">{delivery.notes}</p> : null}
       </Card>
       <Card title="Cost">
@@ -54,5 +57,17 @@ export function DeliveryFacts({ delivery, totalMinor, children }: DeliveryFactsP
         {children}
       </Card>
     </>
+  );
+}
+
+/** Beside the papers of a species whose trade is controlled: what to keep, and where that comes from. */
+function TradeCaution({ species }: { species: string }) {
+  const trade = speciesByCode(species)?.trade;
+  if (!trade) return null;
+  const listed = trade.appendix === "check" ? "may be controlled" : `is controlled, Appendix ${trade.appendix}`;
+  return (
+    <Notice kind="caution" className="mt-3" title={`Trade in ${speciesName(species)} ${listed} (CITES)`}>
+      {trade.words} <span className="text-ink-soft text-sm">{sourceName(trade.source)}.</span>
+    </Notice>
   );
 }

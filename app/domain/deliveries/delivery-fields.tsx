@@ -14,7 +14,7 @@ interface DeliveryFieldsProps {
   suppliers: { id: string; name: string }[];
 }
 
-const row = "grid gap-4 sm:grid-cols-2 lg:grid-cols-3";
+const row = "grid gap-4 sm:grid-cols-2 lg:grid-cols-4";
 
 /** The fields of a delivery, for logging one and for changing it, in the order of the papers. */
 export function DeliveryFields({ fields, suppliers }: DeliveryFieldsProps) {
@@ -50,16 +50,12 @@ export function DeliveryFields({ fields, suppliers }: DeliveryFieldsProps) {
         </div>
       </Card>
       <Card title="What it is">
-        <div className={row}>
-          <SelectField label="Species" {...of("species")}>
+        <div className="grid grid-cols-2 gap-4 lg:grid-cols-4">
+          <SelectField label="Species" {...of("species")} className="col-span-2 sm:col-span-1">
             <option value="">choose</option>
             <SpeciesOptions />
           </SelectField>
-          <SelectField
-            label="Quarters"
-            {...of("quarters")}
-            hint="A tally can mix both; this is what its lines begin with."
-          >
+          <SelectField label="Quarters" {...of("quarters")} hint="The tally begins with it; its lines can differ.">
             <QuartersOptions />
           </SelectField>
           <SelectField label="Drying" {...of("drying")}>
@@ -67,11 +63,16 @@ export function DeliveryFields({ fields, suppliers }: DeliveryFieldsProps) {
             <option value="air">air-dried</option>
             <option value="green">green</option>
           </SelectField>
-          <TextField label="Grade, as bought" autoComplete="off" {...of("grade")} />
+          <TextField
+            label="Grade, as bought"
+            autoComplete="off"
+            {...of("grade")}
+            className="col-span-2 sm:col-span-1"
+          />
         </div>
       </Card>
       <Card title="What is claimed, and the price">
-        <div className={row}>
+        <div className="grid grid-cols-2 gap-4 lg:grid-cols-5">
           <TextField
             label="Claimed volume"
             inputMode="decimal"
@@ -83,7 +84,6 @@ export function DeliveryFields({ fields, suppliers }: DeliveryFieldsProps) {
             <option value="bf">board feet</option>
             <option value="m3">cubic metres</option>
           </SelectField>
-          <span className="hidden lg:block" />
           <TextField label="Price" unit={currency} inputMode="decimal" autoComplete="off" {...of("priceMinor")} />
           <SelectField label="For" {...of("priceBasis")}>
             <option value="bf">each board foot</option>
@@ -96,6 +96,7 @@ export function DeliveryFields({ fields, suppliers }: DeliveryFieldsProps) {
             inputMode="decimal"
             autoComplete="off"
             {...of("freightMinor")}
+            className="col-span-2 sm:col-span-1"
             hint="Shared over the boards with the price."
           />
         </div>
@@ -104,7 +105,7 @@ export function DeliveryFields({ fields, suppliers }: DeliveryFieldsProps) {
         <div className={row}>
           <TextField label="Origin" autoComplete="off" {...of("origin")} hint="Country, forest or mill." />
           <TextField label="Certificate number" autoComplete="off" {...of("certificate")} />
-          <TextArea label="Notes" {...of("notes")} className="sm:col-span-2 lg:col-span-3" />
+          <TextArea label="Notes" {...of("notes")} className="sm:col-span-2" />
         </div>
       </Card>
     </div>

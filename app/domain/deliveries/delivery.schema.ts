@@ -43,6 +43,8 @@ export function deliveryForm(shop: { currency: string }) {
     .refine((form) => form.supplierId !== "" || form.newSupplier !== "", {
       path: ["newSupplier"],
       error: "Choose the supplier, or name a new one.",
+      // Said together with whatever else is wrong.
+      when: ({ value }) => typeof value === "object" && value !== null,
     });
 }
 

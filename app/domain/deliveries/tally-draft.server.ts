@@ -22,7 +22,9 @@ export async function readTallyDraft(
     .where({ id: deliveryId, shop_id: actor.shopId, deleted_at: null })
     .first("tally_draft", "tally_draft_version", "tallied_at");
   if (!row) return null;
-  const kept = row.tally_draft === null ? null : inColumn.safeParse(JSON.parse(row.tally_draft));
+  // The driver parses a JSON column of some servers and not of others.
+  const column = typeof row.tally_draft === "string" ? JSON.parse(row.tally_draft) : row.tally_draft;
+  const kept = column === null ? null : inColumn.safeParse(column);
   return {
     talliedAt: row.tallied_at,
     draft: { ...(kept?.data ?? nothing), version: row.tally_draft_version },

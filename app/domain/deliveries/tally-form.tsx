@@ -48,9 +48,10 @@ export function TallyForm({ delivery, draft }: TallyFormProps) {
   return (
     <>
       <TallyNotices deliveryId={delivery.id} state={state} ownRows={rows.length} {...{ keepMine, takeTheirs }} />
-      <Form method="post" onSubmit={save}>
+      {/* High enough that the footer stays where it is while messages come and go: a tap on Save must not miss it. */}
+      <Form method="post" onSubmit={save} className="flex min-h-[72dvh] flex-col">
         <input type="hidden" name="rows" value={JSON.stringify(rows.map(({ key: _, ...row }) => row))} />
-        <Card>
+        <Card className="-mx-4 rounded-none border-x-0 sm:mx-0 sm:rounded-xl sm:border-x">
           <TallyGrid
             {...{ grid, change, totals, isReady, isTried }}
             unit={units}
@@ -66,7 +67,8 @@ export function TallyForm({ delivery, draft }: TallyFormProps) {
           totals={totals}
           difference={claim && totals.count > 0 ? differenceWords(claim) : null}
           state={state}
-          isSaving={isSaving || !isReady || totals.count === 0}
+          isSaving={isSaving}
+          maySave={isReady && totals.count > 0}
         />
       </Form>
     </>

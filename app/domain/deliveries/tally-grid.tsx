@@ -1,8 +1,8 @@
-import { type Dispatch, useCallback, useEffect, useRef, useState } from "react";
+import { type Dispatch, useCallback, useEffect, useMemo, useRef, useState } from "react";
 import { Button } from "#app/components/button.tsx";
 import type { LengthUnit } from "#app/core/lengths/length-unit.ts";
 import { isBlank, type RowField } from "./tally.ts";
-import { boxId, type Step, TallyRowFields, tallyColumns } from "./tally-row.tsx";
+import { boxId, type RowDoings, type Step, TallyRowFields, tallyColumns } from "./tally-row.tsx";
 import { type Grid, type GridAction, settled } from "./tally-rows.ts";
 import type { TallyTotals } from "./tally-totals.ts";
 
@@ -20,6 +20,7 @@ interface TallyGridProps {
 /** The rows of a tally, made for speed: width, Enter, length, Enter, and on the next row is the width again. */
 export function TallyGrid({ grid, change, totals, unit, isReady, isTried, onEnd }: TallyGridProps) {
   const [said, setSaid] = useState("");
+  const [inHand, setInHand] = useState<number | null>(null);
   // The keys read the rows as they are when pressed, and stay the same functions, so that one row's typing redraws one row.
   const now = useRef(grid.rows);
   useEffect(() => {
@@ -46,21 +47,22 @@ export function TallyGrid({ grid, change, totals, unit, isReady, isTried, onEnd 
     },
     [unit, onEnd],
   );
-  const onType = useCallback(
-    (key: number, field: RowField, value: string) => change({ do: "type", key, field, value }),
-    [change],
-  );
-  const onLeave = useCallback((key: number) => change({ do: "settle", key, unit }), [change, unit]);
-  const onPaste = useCallback((key: number, text: string) => change({ do: "paste", key, text }), [change]);
-  const onRemove = useCallback(
-    (key: number) => {
-      const rows = now.current;
-      const index = rows.findIndex((row) => row.key === key);
-      change({ do: "remove", key });
-      const beside = rows[index + 1] ?? rows[index - 1];
-      if (beside) focusBox(beside.key, "width");
-    },
-    [change],
+  const doings = useMemo<RowDoings>(
+    () => ({
+      onStep,
+      onEnter: setInHand,
+      onType: (key, field, value) => change({ do: "type", key, field, value }),
+      onLeave: (key) => change({ do: "settle", key, unit }),
+      onPaste: (key, text) => change({ do: "paste", key, text }),
+      onRemove: (key) => {
+        const rows = now.current;
+        const index = rows.findIndex((row) => row.key === key);
+        change({ do: "remove", key });
+        const beside = rows[index + 1] ?? rows[index - 1];
+        if (beside) focusBox(beside.key, "width");
+      },
+    }),
+    [change, onStep, unit],
   );
 
   const last = grid.rows.at(-1)?.key;
@@ -86,7 +88,7 @@ export function TallyGrid({ grid, change, totals, unit, isReady, isTried, onEnd 
         <span>Row</span>
         <span>Width</span>
         <span>Length</span>
-        <span>Alike</span>
+        <span>Pieces</span>
         <span className="hidden md:block">Quarters</span>
         <span className="hidden md:block">Species</span>
       </div>
@@ -98,7 +100,8 @@ export function TallyGrid({ grid, change, totals, unit, isReady, isTried, onEnd 
             number={index + 1}
             boardFeet={totals.rows[index]?.boardFeet ?? null}
             isTried={isTried}
-            {...{ onType, onLeave, onStep, onPaste, onRemove }}
+            isInHand={row.key === inHand}
+            doings={doings}
           />
         ))}
       </ol>

@@ -10,7 +10,7 @@ function open(answers: SendAnswer[], start = { rows: [] as TallyRow[], base: 0, 
   const sent: { rows: TallyRow[]; version: number }[] = [];
   const kept: LocalDraft[] = [];
   const states: KeeperState["at"][] = [];
-  const seen = { isTallied: false, draft: theirs };
+  const seen = { isTallied: false, draft: theirs, isReached: true };
   const keeper = createTallyKeeper(
     {
       writer: "phone",
@@ -18,7 +18,7 @@ function open(answers: SendAnswer[], start = { rows: [] as TallyRow[], base: 0, 
         sent.push({ rows, version });
         return answers.shift() ?? { at: "unreachable" };
       },
-      look: async () => seen,
+      look: async () => (seen.isReached ? seen : null),
       write: (draft) => kept.push(draft),
       onState: ({ at }) => states.push(at),
       delaysMs: { rest: 100, again: 1_000 },
@@ -106,6 +106,18 @@ describe("a tally while it is typed", () => {
     seen.isTallied = true;
     await keeper.lookAgain();
     expect(states.at(-1)).toBe("tallied");
+  });
+
+  it("finds out before it is saved that there is no connection, or that somebody has newer, though nothing was left to send", async () => {
+    const { keeper, seen, states } = open([], { rows: [row("8")], base: 9, unsent: false });
+    expect((await keeper.flush()).at).toBe("kept");
+    seen.isReached = false;
+    expect((await keeper.flush()).at).toBe("offline");
+    seen.isReached = true;
+    await vi.advanceTimersByTimeAsync(1_000);
+    expect(states.at(-1)).toBe("kept");
+    seen.draft = { ...theirs, version: 10 };
+    expect((await keeper.flush()).at).toBe("newer elsewhere");
   });
 
   it("says before it is saved whether the server has all of it", async () => {

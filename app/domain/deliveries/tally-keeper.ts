@@ -54,7 +54,7 @@ export function createTallyKeeper(options: KeeperOptions, start: { rows: TallyRo
   }
   function after(ms: number) {
     clearTimeout(timer);
-    timer = setTimeout(() => void sendAll(), ms);
+    timer = setTimeout(() => void (unsent ? sendAll() : lookNow()), ms);
   }
   const isHalted = () => state.at === "newer elsewhere" || state.at === "tallied";
 
@@ -86,6 +86,18 @@ export function createTallyKeeper(options: KeeperOptions, start: { rows: TallyRo
     }
     if (!isHalted()) become({ at: "kept" });
   }
+  /** Asks what the server keeps, which also tells whether it can be reached. */
+  async function lookNow() {
+    const seen = await look();
+    if (unsent || isHalted()) return;
+    if (!seen) {
+      become({ at: "offline" });
+      return after(delaysMs.again);
+    }
+    if (seen.isTallied) return become({ at: "tallied" });
+    if (seen.draft.version !== base) meet(seen.draft);
+    if (!isHalted()) become({ at: "kept" });
+  }
   /** The server has moved on: by this very page, whose answer was lost, or by another. */
   function meet(draft: KeptDraft) {
     if (draft.writer === writer) base = draft.version;
@@ -104,20 +116,17 @@ export function createTallyKeeper(options: KeeperOptions, start: { rows: TallyRo
       keepHere();
       if (!isHalted()) after(delaysMs.rest);
     },
-    /** Sends what has not been sent, and says how it went. */
+    /** Makes sure that the server has all of it and nobody has newer, and says how that went: before the tally is saved. */
     async flush(): Promise<KeeperState> {
-      await sendAll();
-      if (unsent && !isHalted() && state.at === "kept") await sendAll();
+      await sending;
+      if (unsent) await sendAll();
+      else if (!isHalted()) await lookNow();
       return state;
     },
     /** Looks whether another page went on: after this one was away. */
     async lookAgain() {
       if (isHalted()) return;
-      if (unsent) return sendAll();
-      const seen = await look();
-      if (!seen || unsent || isHalted()) return;
-      if (seen.isTallied) become({ at: "tallied" });
-      else if (seen.draft.version !== base) meet(seen.draft);
+      await (unsent ? sendAll() : lookNow());
     },
     /** Puts these rows in the place of what another page kept. */
     async keepMine() {

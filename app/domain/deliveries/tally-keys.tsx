@@ -27,7 +27,7 @@ export function TallyKeys({ boxId, isInches, onNext, onType }: TallyKeysProps) {
     requestAnimationFrame(() => box.setSelectionRange(from + sign.length, from + sign.length));
   }
   return (
-    <div className="mt-2 hidden gap-1.5 pointer-coarse:group-focus-within:flex">
+    <div className="mt-2 hidden gap-1.5 pointer-coarse:flex">
       <button
         type="button"
         tabIndex={-1}

@@ -1,16 +1,28 @@
-import { type KeyboardEvent, memo, type Ref, useState } from "react";
+import { type KeyboardEvent, memo, useState } from "react";
 import { Button } from "#app/components/button.tsx";
-import { QuartersOptions } from "#app/domain/boards/quarters-options.tsx";
+import { isSpeciesCode } from "#app/core/species/species.ts";
+import { isSoldQuarters, QuartersOptions } from "#app/domain/boards/quarters-options.tsx";
 import { useShop } from "#app/domain/shop/shop-view.tsx";
 import { SpeciesOptions } from "#app/domain/species/species-options.tsx";
 import { speciesName } from "#app/domain/species/species-tints.ts";
 import { type RowField, readRow } from "./tally.ts";
 import { TallyBox } from "./tally-box.tsx";
+import { TallyChoice } from "./tally-choice.tsx";
 import { TallyKeys } from "./tally-keys.tsx";
 import type { GridRow } from "./tally-rows.ts";
 
 /** Where a key leads from a box: on along the row or to the next, or up and down the column. */
 export type Step = "on" | "up" | "down";
+
+/** What a row tells the grid. The functions stay the same ones, so that one row's typing redraws one row. */
+export interface RowDoings {
+  onType: (key: number, field: RowField, value: string) => void;
+  onEnter: (key: number) => void;
+  onLeave: (key: number) => void;
+  onStep: (key: number, field: RowField, step: Step) => void;
+  onPaste: (key: number, text: string) => void;
+  onRemove: (key: number) => void;
+}
 
 interface TallyRowProps {
   row: GridRow;
@@ -19,168 +31,132 @@ interface TallyRowProps {
   boardFeet: number | null;
   /** Somebody pressed Save: say what is missing too. */
   isTried: boolean;
-  onType: (key: number, field: RowField, value: string) => void;
-  onLeave: (key: number) => void;
-  onStep: (key: number, field: RowField, step: Step) => void;
-  onPaste: (key: number, text: string) => void;
-  onRemove: (key: number) => void;
+  /** The row in hand; it stays so while the focus is on a button elsewhere. */
+  isInHand: boolean;
+  doings: RowDoings;
 }
 
 /** Columns of the grid: two lines to a board on a phone, one at a desk. */
 export const tallyColumns =
-  "grid grid-cols-[2.75rem_minmax(0,1fr)_minmax(0,1fr)_4.25rem] gap-x-2 gap-y-1.5 md:grid-cols-[3.5rem_9.5rem_9.5rem_5rem_7rem_minmax(9rem,1fr)_5.5rem]";
+  "grid grid-cols-[2.25rem_minmax(0,1fr)_minmax(0,1fr)_3.5rem] gap-x-2 gap-y-1.5 md:grid-cols-[3.5rem_9.5rem_9.5rem_5rem_6.5rem_minmax(9rem,1fr)_5.5rem]";
 
-/** One line of a tally. What cannot be read is said beside its box once the box is left. */
+const fieldNames: Record<RowField, string> = {
+  width: "Width",
+  length: "Length",
+  count: "Pieces",
+  quarters: "Quarters",
+  species: "Species",
+};
+const fieldOrder = Object.keys(fieldNames) as RowField[];
+
+/** One line of a tally. What cannot be read is said under it once the box is left. */
 export const TallyRowFields = memo(function TallyRowFields(props: TallyRowProps) {
-  const { row, number, boardFeet, isTried, onType, onLeave, onStep, onPaste, onRemove } = props;
+  const { row, number, boardFeet, isTried, isInHand, doings } = props;
   const { units } = useShop();
   const [isLeft, setLeft] = useState(false);
   const [box, setBox] = useState<RowField>("width");
   const read = readRow(row, units);
-  const isBlank = read.state === "blank";
   const wrong = read.state === "wrong" ? read.wrong : {};
-  const messageOf = (field: RowField) => {
-    const isMissing = row[field].trim() === "";
-    return isTried || (isLeft && !(isMissing && box === field)) || (!isMissing && box !== field)
-      ? wrong[field]
-      : undefined;
-  };
-  const stepBy = (event: KeyboardEvent, field: RowField, step: Step) => {
-    event.preventDefault();
-    onStep(row.key, field, step);
-  };
-  const boxProps = (field: "count" | "width" | "length") => ({
+  const isSaid = (field: RowField) => isTried || isLeft || (row[field].trim() !== "" && box !== field);
+  const messages = fieldOrder.filter((field) => wrong[field] && isSaid(field));
+  const common = (field: RowField) => ({
     id: boxId(row.key, field),
+    label: `${fieldNames[field]}, row ${number}`,
     value: row[field],
-    message: messageOf(field),
-    onFocus: () => setBox(field),
-    onBlur: () => onLeave(row.key),
-    onChange: (value: string) => onType(row.key, field, value),
+    describedBy: messages.includes(field) ? `${boxId(row.key, field)}-wrong` : undefined,
+    onChange: (value: string) => doings.onType(row.key, field, value),
+  });
+  const boxOf = (field: "count" | "width" | "length") => ({
+    ...common(field),
+    onFocus: () => {
+      setBox(field);
+      doings.onEnter(row.key);
+    },
+    onBlur: () => doings.onLeave(row.key),
     onKeyDown: (event: KeyboardEvent) => {
-      if (event.key === "Enter") stepBy(event, field, "on");
-      if (event.key === "ArrowUp") stepBy(event, field, "up");
-      if (event.key === "ArrowDown") stepBy(event, field, "down");
+      const step = steps[event.key];
+      if (!step) return;
+      event.preventDefault();
+      doings.onStep(row.key, field, step);
     },
   });
   return (
     <li
       aria-label={`Row ${number}`}
-      className="group border-line border-b py-2"
-      onBlur={(event) => {
-        if (event.currentTarget.contains(event.relatedTarget)) return;
-        setLeft(true);
-      }}
+      className="border-line border-b py-2"
+      onBlur={(event) => setLeft(!event.currentTarget.contains(event.relatedTarget))}
       onFocus={() => setLeft(false)}
     >
       <div className={tallyColumns}>
-        <span className="row-span-2 self-start pt-1 md:row-span-1">
+        <span className="self-start pt-1">
           <span className="block font-semibold leading-tight">{number}</span>
-          <span className="block font-mono text-ink-soft text-xs">{boardFeet === null ? "" : `${boardFeet} bf`}</span>
+          <span className="block whitespace-nowrap font-mono text-ink-soft text-xs">
+            {boardFeet === null ? "" : `${boardFeet} bf`}
+          </span>
         </span>
-        <TallyBox
-          {...boxProps("width")}
-          label={`Width, row ${number}`}
-          onPaste={(text) => {
-            if (!/[\n\r\t]|,\s/.test(text.trim())) return false;
-            onPaste(row.key, text);
-            return true;
-          }}
-        />
-        <TallyBox {...boxProps("length")} label={`Length, row ${number}`} />
-        <TallyBox {...boxProps("count")} label={`How many alike, row ${number}`} placeholder="1" />
-        <Choice
-          id={boxId(row.key, "quarters")}
-          label={`Quarters, row ${number}`}
-          className="col-start-2 md:col-start-auto"
-          value={row.quarters}
-          message={messageOf("quarters")}
-          shown={`${row.quarters.replace(/\/4$/, "")}/4`}
-          onChange={(value) => onType(row.key, "quarters", value)}
-          onEnter={() => onStep(row.key, "quarters", "on")}
-        >
-          <QuartersOptions />
-        </Choice>
-        <Choice
-          id={boxId(row.key, "species")}
-          label={`Species, row ${number}`}
-          value={row.species}
-          message={messageOf("species")}
-          shown={speciesName(row.species)}
-          onChange={(value) => onType(row.key, "species", value)}
-          onEnter={() => onStep(row.key, "species", "on")}
-        >
-          <SpeciesOptions />
-        </Choice>
-        <Button
-          type="button"
-          look="quiet"
-          className={`!px-1 ${isBlank ? "invisible" : ""}`}
-          disabled={isBlank}
-          aria-label={`Delete row ${number}`}
-          onClick={() => onRemove(row.key)}
-        >
-          Delete
-        </Button>
+        <TallyBox {...boxOf("width")} takesPaste={isManySizes} onLines={(text) => doings.onPaste(row.key, text)} />
+        <TallyBox {...boxOf("length")} />
+        <TallyBox {...boxOf("count")} placeholder="1" />
+        <div className="col-span-3 col-start-2 flex gap-2 md:contents">
+          <TallyChoice
+            {...common("quarters")}
+            className="w-20 md:w-auto"
+            shown={`${row.quarters.replace(/\/4$/, "")}/4`}
+            isListed={isSoldQuarters(Number(row.quarters))}
+            onEnter={() => doings.onStep(row.key, "quarters", "on")}
+          >
+            <QuartersOptions />
+          </TallyChoice>
+          <TallyChoice
+            {...common("species")}
+            className="flex-1"
+            shown={speciesName(row.species)}
+            isListed={isSpeciesCode(row.species)}
+            onEnter={() => doings.onStep(row.key, "species", "on")}
+          >
+            <SpeciesOptions />
+          </TallyChoice>
+          <Button
+            type="button"
+            look="quiet"
+            className={`!px-1 self-start ${read.state === "blank" ? "invisible" : ""}`}
+            disabled={read.state === "blank"}
+            aria-label={`Delete row ${number}`}
+            onClick={() => doings.onRemove(row.key)}
+          >
+            Delete
+          </Button>
+        </div>
+        {messages.map((field) => (
+          <p
+            key={field}
+            id={`${boxId(row.key, field)}-wrong`}
+            className="col-span-full col-start-2 font-semibold text-sm text-wrong"
+          >
+            {fieldNames[field]}: {wrong[field]}
+          </p>
+        ))}
       </div>
-      <TallyKeys
-        boxId={boxId(row.key, box)}
-        isInches={units === "in"}
-        onNext={() => onStep(row.key, box, "on")}
-        onType={(value) => onType(row.key, box, value)}
-      />
+      {isInHand ? (
+        <TallyKeys
+          boxId={boxId(row.key, box)}
+          isInches={units === "in"}
+          onNext={() => doings.onStep(row.key, box, "on")}
+          onType={(value) => doings.onType(row.key, box, value)}
+        />
+      ) : null}
     </li>
   );
 });
 
+const steps: Record<string, Step> = { Enter: "on", ArrowUp: "up", ArrowDown: "down" };
+
+/** Is this more than one size, for rows of its own? */
+function isManySizes(text: string): boolean {
+  return /[\n\r\t]|,\s/.test(text.trim());
+}
+
 /** The id of a box, by which the keys move the focus. */
 export function boxId(key: number, field: RowField): string {
   return `tally-${key}-${field}`;
-}
-
-interface ChoiceProps {
-  id: string;
-  label: string;
-  className?: string;
-  value: string;
-  /** How the value reads while the whole list is not there. */
-  shown: string;
-  message: string | undefined;
-  onChange: (value: string) => void;
-  onEnter: () => void;
-  children: React.ReactNode;
-  ref?: Ref<HTMLSelectElement>;
-}
-
-/** A select whose options come when somebody goes to it: two hundred rows of every species would make a phone slow. */
-function Choice({ id, label, className = "", value, shown, message, onChange, onEnter, children }: ChoiceProps) {
-  const [isOpen, setOpen] = useState(false);
-  const open = () => setOpen(true);
-  return (
-    <span className={`grid min-w-0 content-start ${className}`}>
-      <select
-        id={id}
-        aria-label={label}
-        aria-invalid={message ? true : undefined}
-        aria-describedby={message ? `${id}-wrong` : undefined}
-        value={value}
-        className="min-h-11 w-full min-w-0 rounded-lg border border-line-strong bg-surface px-2 aria-invalid:border-2 aria-invalid:border-wrong"
-        onFocus={open}
-        onPointerDown={open}
-        onChange={(event) => onChange(event.target.value)}
-        onKeyDown={(event) => {
-          if (event.key !== "Enter") return;
-          event.preventDefault();
-          onEnter();
-        }}
-      >
-        {isOpen ? children : null}
-        {isOpen && !message ? null : <option value={value}>{value === "" ? "choose" : shown}</option>}
-      </select>
-      {message ? (
-        <span id={`${id}-wrong`} className="font-semibold text-sm text-wrong">
-          {message}
-        </span>
-      ) : null}
-    </span>
-  );
 }

@@ -12,7 +12,7 @@ export interface OpenTally {
   /** False until this device has looked what it holds; typing before that could be lost. */
   isReady: boolean;
   state: KeeperState;
-  /** Sends what has not been sent, and says how it went: before the tally is saved. */
+  /** Makes sure that the server has all of it and nobody has newer: before the tally is saved. */
   flush: () => Promise<KeeperState>;
   keepMine: () => void;
   takeTheirs: () => void;
@@ -51,7 +51,7 @@ export function useTally(
     if (choice === "ask") own.offer(server);
     setReady(true);
     const back = () => document.visibilityState === "visible" && void own.lookAgain();
-    void own.flush();
+    if (choice === "local") void own.flush();
     document.addEventListener("visibilitychange", back);
     window.addEventListener("online", back);
     return () => {

@@ -1,15 +1,14 @@
-import { Form, href, useLocation } from "react-router";
-import { Button, ButtonLink } from "#app/components/button.tsx";
-import { Card, PageHead } from "#app/components/card.tsx";
-import { SelectField, TextField } from "#app/components/field.tsx";
+import { href, useLocation } from "react-router";
+import { ButtonLink } from "#app/components/button.tsx";
+import { PageHead } from "#app/components/card.tsx";
 import { Empty } from "#app/components/notice.tsx";
 import { Pager } from "#app/components/pager.tsx";
 import { listDeliveries } from "#app/domain/deliveries/deliveries.sql.server.ts";
-import { type DeliveryFilter, deliveriesPerPage, readDeliveryFilter } from "#app/domain/deliveries/delivery-filter.ts";
+import { deliveriesPerPage, readDeliveryFilter } from "#app/domain/deliveries/delivery-filter.ts";
+import { DeliveryFilterForm } from "#app/domain/deliveries/delivery-filter-form.tsx";
 import { DeliveryRows } from "#app/domain/deliveries/delivery-rows.tsx";
 import { listSuppliers } from "#app/domain/deliveries/suppliers.sql.server.ts";
 import { can } from "#app/domain/shop/permissions.ts";
-import { SpeciesOptions } from "#app/domain/species/species-options.tsx";
 import { dbContext } from "#app/server/context.server.ts";
 import { requireRole } from "#app/server/guards.server.ts";
 import type { Route } from "./+types/list.ts";
@@ -70,49 +69,5 @@ export default function Deliveries({ loaderData }: Route.ComponentProps) {
       )}
       <Pager page={page} pages={pages} label="Pages of deliveries" />
     </>
-  );
-}
-
-interface FilterFormProps {
-  filter: DeliveryFilter;
-  suppliers: { id: string; name: string }[];
-}
-
-function DeliveryFilterForm({ filter, suppliers }: FilterFormProps) {
-  return (
-    <Card className="mb-4">
-      <Form
-        key={JSON.stringify(filter)}
-        method="get"
-        role="search"
-        aria-label="Filter deliveries"
-        className="grid items-end gap-3 sm:grid-cols-2 lg:grid-cols-[minmax(0,1.4fr)_repeat(4,minmax(0,1fr))_auto]"
-      >
-        <TextField label="Word of the papers" name="q" type="search" defaultValue={filter.q} />
-        <SelectField label="Supplier" name="supplier" defaultValue={filter.supplier}>
-          <option value="">any</option>
-          {suppliers.map(({ id, name }) => (
-            <option key={id} value={id}>
-              {name}
-            </option>
-          ))}
-        </SelectField>
-        <SelectField label="Species" name="species" defaultValue={filter.species}>
-          <option value="">any</option>
-          <SpeciesOptions />
-        </SelectField>
-        <SelectField label="Tally" name="tally" defaultValue={filter.tally}>
-          <option value="any">any</option>
-          <option value="waiting">still to tally</option>
-          <option value="done">tallied</option>
-        </SelectField>
-        <SelectField label="Order" name="sort" defaultValue={filter.sort}>
-          <option value="newest">newest first</option>
-          <option value="oldest">oldest first</option>
-          <option value="supplier">by supplier</option>
-        </SelectField>
-        <Button>Show</Button>
-      </Form>
-    </Card>
   );
 }

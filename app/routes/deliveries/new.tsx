@@ -48,13 +48,22 @@ export async function action({ request, context }: Route.ActionArgs) {
   );
 }
 
-export default function NewDelivery({ loaderData, actionData }: Route.ComponentProps) {
-  const { suppliers, today } = loaderData;
+export default function NewDelivery(props: Route.ComponentProps) {
+  // The server's day is that of Greenwich; this device knows what day it is where the lorry stands.
+  const receivedOn = useSyncExternalStore(neverChanges, dayHere, () => props.loaderData.today);
+  return (
+    <>
+      <PageHead title="Log a delivery" lead="What the supplier's papers say. Measuring comes next, board by board." />
+      <NewDeliveryForm key={receivedOn} receivedOn={receivedOn} {...props} />
+    </>
+  );
+}
+
+function NewDeliveryForm({ loaderData, actionData, receivedOn }: Route.ComponentProps & { receivedOn: string }) {
+  const { suppliers } = loaderData;
   const shop = useShop();
   const schema = deliveryForm(shop);
   const sending = useNavigation().state !== "idle";
-  // The server's day is that of Greenwich; this device knows what day it is where the lorry stands.
-  const receivedOn = useSyncExternalStore(neverChanges, dayHere, () => today);
   const [form, fields] = useForm({
     id: "delivery",
     lastResult: actionData?.result,
@@ -63,22 +72,19 @@ export default function NewDelivery({ loaderData, actionData }: Route.ComponentP
     shouldRevalidate: "onInput",
   });
   return (
-    <>
-      <PageHead title="Log a delivery" lead="What the supplier's papers say. Measuring comes next, board by board." />
-      <Form method="post" {...getFormProps(form)} className="grid gap-4">
-        <DeliveryFields fields={fields} suppliers={suppliers} />
-        <div className="flex flex-wrap gap-3">
-          <Button look="main" disabled={sending} className="w-full sm:w-auto">
-            Log it and tally
-          </Button>
-          <Button name="then" value="look" disabled={sending} className="w-full sm:w-auto">
-            Log it, tally later
-          </Button>
-          <ButtonLink to={href("/deliveries")} look="quiet">
-            Back to deliveries
-          </ButtonLink>
-        </div>
-      </Form>
-    </>
+    <Form method="post" {...getFormProps(form)} className="grid gap-4">
+      <DeliveryFields fields={fields} suppliers={suppliers} />
+      <div className="flex flex-wrap gap-3">
+        <Button look="main" disabled={sending} className="w-full sm:w-auto">
+          Log it and tally
+        </Button>
+        <Button name="then" value="look" disabled={sending} className="w-full sm:w-auto">
+          Log it, tally later
+        </Button>
+        <ButtonLink to={href("/deliveries")} look="quiet">
+          Back to deliveries
+        </ButtonLink>
+      </div>
+    </Form>
   );
 }

@@ -34,7 +34,7 @@ export default function Suppliers({ loaderData }: Route.ComponentProps) {
           {suppliers.map((supplier) => (
             <li
               key={supplier.id}
-              className="grid items-center gap-x-5 px-4 py-2 sm:grid-cols-[minmax(0,1.4fr)_minmax(0,1fr)_auto]"
+              className="grid items-center gap-x-5 px-4 py-2 sm:grid-cols-[minmax(0,1.4fr)_minmax(0,1fr)_16rem]"
             >
               <Link
                 to={href("/suppliers/:supplierId", { supplierId: supplier.id })}

@@ -75,6 +75,11 @@ describe("imports run to the left only", () => {
 });
 
 describe("what only some may do", () => {
+  it("imports a route in tests only", () => {
+    const text = 'import { loader } from "./boards/board.tsx";';
+    expect(check("app/routes/roles.db.test.ts", text)).toEqual([]);
+    expect(check("app/routes/home.ts", text)).toHaveLength(1);
+  });
   it("reads process.env in services only", () => {
     expect(check("app/server/a.server.ts", "\nconst port = process.env.PORT;")).toEqual([
       "2 only services read process.env",

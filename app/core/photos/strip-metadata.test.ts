@@ -1,5 +1,7 @@
+import fc from "fast-check";
 import sharp from "sharp";
 import { describe, expect, test } from "vitest";
+import { pngChunk } from "#tests/factories/pictures.ts";
 import { stripMetadata } from "./strip-metadata.ts";
 
 const exif = {
@@ -59,6 +61,80 @@ describe("stripMetadata", () => {
     ]);
     expect(Buffer.from(stripMetadata(before, "jpeg", 1)).includes("the place")).toBe(false);
   });
+
+  // Exif in PNG is the chunk eXIf (PNG third edition, 11.3.4.6), in WebP the chunk EXIF (RFC 9649, 2.7.1.5).
+  test.each(["jpeg", "png", "webp"] as const)("a %s is seen the same way up as before", async (format) => {
+    const before = await picture().withMetadata({ orientation: 6 }).withExif(exif).toFormat(format).toBuffer();
+    const after = Buffer.from(stripMetadata(before, format, 6));
+    expect(after.includes("Quarry Lane")).toBe(false);
+    expect((await sharp(after).metadata()).orientation).toBe(6);
+    const upright = (file: Buffer) => sharp(file).autoOrient().raw().toBuffer({ resolveWithObject: true });
+    const [was, is] = await Promise.all([upright(before), upright(after)]);
+    expect([is.info.width, is.info.height]).toEqual([40, 64]);
+    expect(is.data).toEqual(was.data);
+  });
+
+  describe("notes of a kind nobody has heard of go too", () => {
+    const secret = Buffer.from("the place it was taken: 51.5 N");
+
+    test("in a PNG", async () => {
+      const whole = await picture().png().toBuffer();
+      const headEnd = 8 + 25;
+      for (const name of ["caBX", "prVt", "zTXt", "iTXt", "acTL"]) {
+        const before = Buffer.concat([whole.subarray(0, headEnd), pngChunk(name, secret), whole.subarray(headEnd)]);
+        expect(Buffer.from(stripMetadata(before, "png", 1)).includes("the place")).toBe(false);
+      }
+    });
+
+    test("in a WebP, and behind it", async () => {
+      const whole = await picture().webp().toBuffer();
+      const chunk = Buffer.concat([Buffer.from("C2PA"), Buffer.from([secret.length, 0, 0, 0]), secret]);
+      const before = Buffer.concat([whole, chunk]);
+      expect(Buffer.from(stripMetadata(before, "webp", 1)).includes("the place")).toBe(false);
+      before.writeUInt32LE(before.length - 8, 4);
+      const after = Buffer.from(stripMetadata(before, "webp", 1));
+      expect(after.includes("the place")).toBe(false);
+      expect(await sharp(after).raw().toBuffer()).toEqual(await sharp(whole).raw().toBuffer());
+    });
+
+    test("in a JPEG, before its pixels or between two scans of them", async () => {
+      const whole = await picture().jpeg({ progressive: true }).toBuffer();
+      const scans = [...whole.keys()].filter((at) => whole[at] === 0xff && whole[at + 1] === 0xda);
+      expect(scans.length).toBeGreaterThan(2);
+      for (const at of [2, ...scans])
+        for (const marker of [0xe0, 0xe1, 0xe2, 0xeb, 0xed, 0xfe]) {
+          const note = Buffer.concat([Buffer.from([0xff, marker, 0, secret.length + 2]), secret]);
+          const before = Buffer.concat([whole.subarray(0, at), note, whole.subarray(at)]);
+          const after = Buffer.from(stripMetadata(before, "jpeg", 1));
+          expect(after.includes("the place")).toBe(false);
+          expect(await sharp(after).raw().toBuffer()).toEqual(await sharp(whole).raw().toBuffer());
+        }
+    });
+  });
+
+  test.each(["jpeg", "png", "webp"] as const)(
+    "a damaged %s is cleaned or refused, and nothing else",
+    async (format) => {
+      const whole = await picture().toFormat(format).toBuffer();
+      const damage = fc.record({
+        edits: fc.array(fc.tuple(fc.nat(whole.length - 1), fc.nat(255)), { minLength: 1, maxLength: 6 }),
+        length: fc.integer({ min: 0, max: whole.length }),
+      });
+      fc.assert(
+        fc.property(damage, ({ edits, length }) => {
+          const bytes = Uint8Array.from(whole);
+          for (const [at, byte] of edits) bytes[at] = byte;
+          try {
+            const after = stripMetadata(bytes.subarray(0, length), format, 6);
+            expect(after.length).toBeLessThanOrEqual(length + 60);
+          } catch (error) {
+            expect(error).toBeInstanceOf(RangeError);
+          }
+        }),
+        { numRuns: 500 },
+      );
+    },
+  );
 
   test.each(["jpeg", "png", "webp"] as const)("bytes that are no %s are refused", (format) => {
     expect(() => stripMetadata(new Uint8Array(40), format, 1)).toThrow(RangeError);

@@ -1,6 +1,6 @@
 import sharp, { type Metadata } from "sharp";
 import { stripMetadata } from "#app/core/photos/strip-metadata.ts";
-import { mostPhotoPixels, type PhotoRefusal, photoSizes } from "./photo.ts";
+import { mostPhotoPixels, mostPhotoSidePx, type PhotoRefusal, photoSizes } from "./photo.ts";
 
 export interface TakenPicture {
   ok: true;
@@ -17,22 +17,35 @@ export interface TakenPicture {
 
 const types: Record<string, string> = { jpeg: "image/jpeg", png: "image/png", webp: "image/webp", avif: "image/avif" };
 
+type Inspected = TakenPicture | { ok: false; why: PhotoRefusal };
+
+let before: Promise<unknown> = Promise.resolve();
+
 /**
  * Judges a picture by its bytes alone, whatever its name or sender says, and makes the sizes it is shown in.
  * Every pixel is decoded, so a file cut short is found; a picture of too many pixels is refused from its header, before any is.
+ * One at a time in a process: a small file may hold 60 megapixels of 16 bits, interlaced, which take half a gigabyte.
  */
-export async function inspectPicture(bytes: Uint8Array): Promise<TakenPicture | { ok: false; why: PhotoRefusal }> {
+export function inspectPicture(bytes: Uint8Array): Promise<Inspected> {
+  const inspected = before.then(() => inspectNow(bytes));
+  before = inspected.catch(() => {});
+  return inspected;
+}
+
+async function inspectNow(bytes: Uint8Array): Promise<Inspected> {
   const options = { limitInputPixels: mostPhotoPixels, failOn: "truncated", sequentialRead: true } as const;
   let seen: Metadata;
   try {
     seen = await sharp(bytes, { ...options, limitInputPixels: false }).metadata();
   } catch {
-    return { ok: false, why: "wrong type" };
+    // Cut short, a WebP or a small AVIF does not even give its size.
+    return { ok: false, why: beginsAsPicture(bytes) ? "broken" : "wrong type" };
   }
   const format = seen.format === "heif" && seen.compression === "av1" ? "avif" : (seen.format as string);
   const contentType = types[format];
   if (!contentType || !seen.width || !seen.height || (seen.pages ?? 1) > 1) return { ok: false, why: "wrong type" };
-  if (seen.width * seen.height > mostPhotoPixels) return { ok: false, why: "too many pixels" };
+  if (seen.width * seen.height > mostPhotoPixels || Math.max(seen.width, seen.height) > mostPhotoSidePx)
+    return { ok: false, why: "too many pixels" };
   try {
     const upright = await sharp(bytes, options)
       .autoOrient()
@@ -59,6 +72,12 @@ export async function inspectPicture(bytes: Uint8Array): Promise<TakenPicture | 
   } catch {
     return { ok: false, why: "broken" };
   }
+}
+
+/** The first bytes of a JPEG, PNG, WebP or AVIF. */
+function beginsAsPicture(bytes: Uint8Array): boolean {
+  const head = Buffer.from(bytes.subarray(0, 12)).toString("latin1");
+  return /^(\xff\xd8\xff|\x89PNG\r\n|RIFF.{4}WEBP|.{4}ftypavif)/s.test(head);
 }
 
 function fit(longest: number) {

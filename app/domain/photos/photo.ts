@@ -8,6 +8,8 @@ export type PhotoSize = keyof typeof photoSizes | "original";
 
 export const mostPhotoBytes = 25 * 1024 * 1024;
 export const mostPhotoPixels = 60_000_000;
+/** No camera makes a longer side, and a strip one pixel wide and 59 million long takes twenty seconds to scale down. */
+export const mostPhotoSidePx = 30_000;
 
 export interface Photo {
   id: string;
@@ -28,7 +30,7 @@ const words: Record<PhotoRefusal, string> = {
   "too large": "That file is over 25 MB. Take the photo at a smaller size, or save it as JPEG.",
   "wrong type":
     "That is not a JPEG, PNG, WebP or AVIF picture. iPhones: choose “Most compatible” under Camera, Formats.",
-  "too many pixels": "That picture is over 60 megapixels. Take it at a smaller size.",
+  "too many pixels": "That picture is over 60 megapixels, or 30,000 pixels long. Take it at a smaller size.",
   broken: "The file is cut short or damaged. Take the photo again.",
 };
 

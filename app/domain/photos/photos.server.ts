@@ -11,6 +11,7 @@ import { mostPhotoBytes, type PhotoKind, type PhotoRefusal } from "./photo.ts";
 import {
   deletePhotoRow,
   deleteWaiting,
+  getPhoto,
   getWaitingPhoto,
   insertWaitingPhoto,
   listStaleWaiting,
@@ -52,15 +53,20 @@ export type PhotoConfirmed =
 /**
  * Takes in a photo that was sent: reads what arrived, believes only its bytes, strips where it was taken, makes the sizes it is shown in.
  * A refused one leaves nothing behind. The address it was sent to stays open for a while, so nothing that is shown is kept there.
+ * Said twice, it is taken in once, and both are told so.
  */
 export async function confirmPhoto(db: Knex, storage: Storage, actor: Actor, photoId: string): Promise<PhotoConfirmed> {
   const waiting = await getWaitingPhoto(db, actor, photoId);
-  if (!waiting) return { ok: false, why: "missing" };
+  if (!waiting) return takenAlready(db, actor, photoId);
   const arrived = await readUpload(storage, waiting.uploadKey, mostPhotoBytes);
   if (!arrived.ok) {
-    // One that has not arrived may still: its row waits for another try.
-    if (arrived.why !== "not arrived") await drop(db, storage, actor, waiting);
-    return arrived;
+    if (arrived.why !== "not arrived") {
+      await drop(db, storage, actor, waiting);
+      return arrived;
+    }
+    // Either it was taken in meanwhile and its upload is gone, or it may still come: its row waits for another try.
+    const taken = await takenAlready(db, actor, photoId);
+    return taken.ok ? taken : arrived;
   }
   const picture = await inspectPicture(arrived.bytes);
   if (!picture.ok) {
@@ -72,22 +78,34 @@ export async function confirmPhoto(db: Knex, storage: Storage, actor: Actor, pho
     screenKey: newStorageKey("photos", "webp"),
     smallKey: newStorageKey("photos", "webp"),
   };
-  await Promise.all([
+  const puts = await Promise.allSettled([
     storage.put(keys.originalKey, picture.original, picture.contentType),
     storage.put(keys.screenKey, picture.screen, "image/webp"),
     storage.put(keys.smallKey, picture.small, "image/webp"),
   ]);
+  const forget = () => Promise.allSettled(Object.values(keys).map((key) => storage.delete(key)));
+  const failed = puts.find((put) => put.status === "rejected");
+  if (failed) {
+    await forget();
+    throw failed.reason;
+  }
   const { contentType, widthPx, heightPx } = picture;
-  const first = await withTransaction(db, async (trx) => {
+  const isFirst = await withTransaction(db, async (trx) => {
     const ready = { ...keys, contentType, widthPx, heightPx, bytes: picture.original.byteLength };
     if (!(await markReady(trx, actor, photoId, ready))) return false;
     await writeEvent(trx, actor, waiting.boardId, "photographed", { kind: waiting.kind });
     return true;
   });
   // Pressed twice: the first press won, this one's files go.
-  if (!first) await Promise.all(Object.values(keys).map((key) => storage.delete(key)));
+  if (!isFirst) await forget();
+  if (!isFirst) return takenAlready(db, actor, photoId);
   await storage.delete(waiting.uploadKey);
   return { ok: true, photoId, boardId: waiting.boardId };
+}
+
+async function takenAlready(db: Knex, actor: Actor, photoId: string): Promise<PhotoConfirmed> {
+  const photo = await getPhoto(db, actor, photoId);
+  return photo ? { ok: true, photoId, boardId: photo.boardId } : { ok: false, why: "missing" };
 }
 
 async function drop(db: Knex, storage: Storage, actor: Actor, waiting: WaitingPhoto): Promise<void> {
@@ -100,19 +118,20 @@ async function sweepStale(db: Knex, storage: Storage, actor: Actor, now: Date): 
   for (const waiting of stale) await drop(db, storage, actor, waiting);
 }
 
-/** Removes a photo and its files. Readings made from it stay. Null when it is not in this shop. */
+/** Removes a board's photo and its files. Readings made from it stay. False when it is not that board's, or not in this shop. */
 export async function removePhoto(
   db: Knex,
   storage: Storage,
   actor: Actor,
+  boardId: string,
   photoId: string,
-): Promise<{ boardId: string } | null> {
+): Promise<boolean> {
   const removed = await withTransaction(db, async (trx) => {
-    const row = await deletePhotoRow(trx, actor, photoId);
-    if (row) await writeEvent(trx, actor, row.boardId, "photo removed", { kind: row.kind });
+    const row = await deletePhotoRow(trx, actor, boardId, photoId);
+    if (row) await writeEvent(trx, actor, boardId, "photo removed", { kind: row.kind });
     return row;
   });
-  if (!removed) return null;
+  if (!removed) return false;
   await Promise.all(removed.keys.map((key) => storage.delete(key)));
-  return { boardId: removed.boardId };
+  return true;
 }

@@ -11,6 +11,14 @@ export interface WaitingPhoto {
   uploadKey: string;
 }
 
+/** Photos of boards that are in this shop now. Every query on single photos starts here: what shows a deleted board is gone with it. */
+function photosOf(db: Knex, actor: ByShop): Knex.QueryBuilder {
+  return db("photos as f")
+    .join("boards as b", "b.id", "f.board_id")
+    .where("f.shop_id", actor.shopId)
+    .whereNull("b.deleted_at");
+}
+
 /** A board's photos, ends first, newest first within a kind. */
 export async function listPhotos(db: Knex, actor: ByShop, boardId: string): Promise<Photo[]> {
   return db("photos as f")
@@ -34,9 +42,9 @@ export async function getPhoto(
   actor: ByShop,
   photoId: string,
 ): Promise<(Photo & { boardId: string }) | null> {
-  const row = await db("photos as f")
+  const row = await photosOf(db, actor)
     .join("people as p", "p.id", "f.added_by")
-    .where({ "f.id": photoId, "f.shop_id": actor.shopId, "f.state": "ready" })
+    .where({ "f.id": photoId, "f.state": "ready" })
     .first({
       id: "f.id",
       boardId: "f.board_id",
@@ -52,9 +60,9 @@ export async function getPhoto(
 
 /** Where one size of a photo is kept, or null. */
 export async function photoKey(db: Knex, actor: ByShop, photoId: string, size: PhotoSize): Promise<string | null> {
-  const row = await db("photos")
-    .where({ id: photoId, shop_id: actor.shopId, state: "ready" })
-    .first("original_key", "screen_key", "small_key");
+  const row = await photosOf(db, actor)
+    .where({ "f.id": photoId, "f.state": "ready" })
+    .first("f.original_key", "f.screen_key", "f.small_key");
   if (!row) return null;
   return size === "original" ? row.original_key : size === "screen" ? row.screen_key : row.small_key;
 }
@@ -72,9 +80,9 @@ export async function insertWaitingPhoto(db: Knex, actor: Actor, photo: WaitingP
 
 /** A photo announced and not yet confirmed, or null. */
 export async function getWaitingPhoto(db: Knex, actor: ByShop, photoId: string): Promise<WaitingPhoto | null> {
-  const row = await db("photos")
-    .where({ id: photoId, shop_id: actor.shopId, state: "waiting" })
-    .first({ id: "id", boardId: "board_id", kind: "kind", uploadKey: "original_key" });
+  const row = await photosOf(db, actor)
+    .where({ "f.id": photoId, "f.state": "waiting" })
+    .first({ id: "f.id", boardId: "f.board_id", kind: "f.kind", uploadKey: "f.original_key" });
   return row ?? null;
 }
 
@@ -116,16 +124,20 @@ export async function deleteWaiting(db: Knex, actor: ByShop, photoId: string): P
   await db("photos").where({ id: photoId, shop_id: actor.shopId, state: "waiting" }).delete();
 }
 
-/** Takes a photo's row away and says which files it had; null when it is not in this shop. Readings made from it keep what they read. */
+/** Takes a photo's row away and says which files it had; null when it is not that board's. Readings made from it keep what they read. */
 export async function deletePhotoRow(
   trx: Knex,
   actor: ByShop,
+  boardId: string,
   photoId: string,
-): Promise<{ boardId: string; kind: PhotoKind; keys: string[] } | null> {
-  const at = { id: photoId, shop_id: actor.shopId, state: "ready" };
-  const row = await trx("photos").where(at).first("board_id", "kind", "original_key", "screen_key", "small_key");
+): Promise<{ kind: PhotoKind; keys: string[] } | null> {
+  // Locked, so that of two people removing it one finds it gone.
+  const row = await photosOf(trx, actor)
+    .where({ "f.id": photoId, "f.board_id": boardId, "f.state": "ready" })
+    .forUpdate()
+    .first("f.kind", "f.original_key", "f.screen_key", "f.small_key");
   if (!row) return null;
   await trx("ring_readings").where({ photo_id: photoId, shop_id: actor.shopId }).update({ photo_id: null });
-  await trx("photos").where(at).delete();
-  return { boardId: row.board_id, kind: row.kind, keys: [row.original_key, row.screen_key, row.small_key] };
+  await trx("photos").where({ id: photoId, shop_id: actor.shopId }).delete();
+  return { kind: row.kind, keys: [row.original_key, row.screen_key, row.small_key] };
 }

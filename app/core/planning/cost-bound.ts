@@ -1,4 +1,4 @@
-import { greatestDivisor } from "./plan-bins.ts";
+import { greatestDivisor } from "./greatest-divisor.ts";
 import type { Task } from "./task.ts";
 
 /** Costs are compared in parts this small of the unit of money. */

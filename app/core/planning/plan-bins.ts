@@ -1,6 +1,7 @@
 import type { BinPattern } from "./bins/bin-program.ts";
 import { packBins } from "./bins/pack-bins.ts";
 import type { RowBlock } from "./block.ts";
+import { greatestDivisor } from "./greatest-divisor.ts";
 import { type Pattern, patternOf } from "./pattern.ts";
 import { costOf, type Solution } from "./solution.ts";
 import type { Pose, Stock, Task } from "./task.ts";
@@ -74,10 +75,4 @@ export function rowPattern(task: Task, stock: Stock, way: "x" | "y", kinds: numb
 
 function kindsOf(bin: BinPattern, take: (item: number) => number): number[] {
   return bin.items.flatMap((item, i) => Array.from({ length: bin.counts[i]! }, () => take(item)));
-}
-
-export function greatestDivisor(a: number, b: number): number {
-  let [x, y] = [a, b];
-  while (y > 0) [x, y] = [y, x % y];
-  return x;
 }

@@ -4,6 +4,7 @@ import type { Plan } from "./layout.ts";
 import { makePlan } from "./make-plan.ts";
 import { makeTask } from "./make-task.ts";
 import { isBinTask, planBins } from "./plan-bins.ts";
+import { planBoards } from "./plan-boards.ts";
 import type { Problem } from "./problem.ts";
 import { costOf } from "./solution.ts";
 
@@ -19,11 +20,16 @@ export interface PlanWatch {
  *
  * The same problem gives the same plan unless shouldStop ends the search early. It runs to its end in the calling thread.
  */
-export function solvePlan(problem: Problem, { shouldStop = () => false }: PlanWatch = {}): Plan {
+export function solvePlan(
+  problem: Problem,
+  { shouldStop = () => false, onProgress = () => undefined }: PlanWatch = {},
+): Plan {
   const { task, barred } = makeTask(problem);
   const start = firstFit(task);
   const mayGoOn = () => !shouldStop();
-  const { solution, bound } = isBinTask(task) ? planBins(task, start, mayGoOn) : { solution: start, bound: 0 };
+  const { solution, bound } = isBinTask(task)
+    ? planBins(task, start, mayGoOn)
+    : planBoards(task, start, { mayGoOn, onProgress });
   const best = Math.max(bound, nextPossibleCost(task, areaBound(task), costOf(solution)));
   return makePlan(task, solution, best, barred);
 }

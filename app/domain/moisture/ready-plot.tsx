@@ -12,6 +12,7 @@ export function ReadyPlot({ view, today }: { view: ReadyView; today?: number | n
   const values = readings.map(({ moisturePct }) => moisturePct);
   const low = Math.max(0, Math.floor(Math.min(...values, band.lowPct, emcPct) - 1));
   const high = Math.ceil(Math.max(...values, band.highPct, emcPct) + 1);
+  const isTodayShown = today != null && today <= lastDay;
   const marks: PlotMark[] = readyDay
     ? [{ x: readyDay.likely, y: high, text: dayLabel(view, readyDay.likely), side: "below" }]
     : [];
@@ -20,9 +21,9 @@ export function ReadyPlot({ view, today }: { view: ReadyView; today?: number | n
       x={{
         from: 0,
         to: lastDay,
-        ticks: view.startsAt ? [0, lastDay / 2, lastDay] : roundTicks(0, lastDay, 4),
+        ticks: view.startsAt ? [0, lastDay] : roundTicks(0, lastDay, 4),
         print: (day) => dayLabel(view, day),
-        label: view.startsAt ? "" : "Days from the first reading",
+        label: view.startsAt ? (isTodayShown ? "Today is dashed" : "") : "Days from the first reading",
       }}
       y={{
         from: low,
@@ -81,7 +82,7 @@ export function ReadyPlot({ view, today }: { view: ReadyView; today?: number | n
                 />
               </>
             ) : null}
-            {today == null || today > lastDay ? null : (
+            {isTodayShown ? (
               <path
                 d={`M${x(today)} 0V1000`}
                 stroke="currentColor"
@@ -89,7 +90,7 @@ export function ReadyPlot({ view, today }: { view: ReadyView; today?: number | n
                 strokeDasharray="4 5"
                 vectorEffect="non-scaling-stroke"
               />
-            )}
+            ) : null}
             {readings.map(({ day, moisturePct, isDoubted }) => (
               <PlotDot
                 key={day}

@@ -11,19 +11,26 @@ import { getBoard } from "#app/domain/boards/boards.sql.server.ts";
 import { DefectList } from "#app/domain/boards/defect-list.tsx";
 import { listDefects } from "#app/domain/boards/defects.sql.server.ts";
 import { HoldCards } from "#app/domain/holds/hold-cards.tsx";
+import { boardReadiness } from "#app/domain/moisture/board-readiness.ts";
 import { listMoistureReadings } from "#app/domain/moisture/moisture.sql.server.ts";
 import { MoistureCard } from "#app/domain/moisture/moisture-card.tsx";
+import { placeFor, readPlace } from "#app/domain/moisture/places.ts";
+import { boardMovement } from "#app/domain/movement/board-movement.ts";
+import { MovementCard } from "#app/domain/movement/movement-card.tsx";
 import { PhotoStrip } from "#app/domain/photos/photo-strip.tsx";
 import { listPhotos } from "#app/domain/photos/photos.sql.server.ts";
 import { RingCard } from "#app/domain/rings/ring-card.tsx";
 import { currentReadings } from "#app/domain/rings/rings.sql.server.ts";
 import { can } from "#app/domain/shop/permissions.ts";
+import { boardWeight } from "#app/domain/weight/board-weight.ts";
+import { WeightCard } from "#app/domain/weight/weight-card.tsx";
 import { dbContext } from "#app/server/context.server.ts";
 import { requireFound, requireRole } from "#app/server/guards.server.ts";
+import { systemClock } from "#app/services/clock.server.ts";
 import type { Route } from "./+types/board.ts";
 
-export async function loader({ params, context }: Route.LoaderArgs) {
-  const { actor } = requireRole(context, "board:see");
+export async function loader({ params, context, url }: Route.LoaderArgs) {
+  const { actor, shop } = requireRole(context, "board:see");
   const db = context.get(dbContext);
   const board = requireFound(await getBoard(db, actor, params.boardId));
   const [events, photos, readings, moisture, defects] = await Promise.all([
@@ -33,11 +40,14 @@ export async function loader({ params, context }: Route.LoaderArgs) {
     listMoistureReadings(db, actor, board.id),
     listDefects(db, actor, board.id),
   ]);
-  return { board, events, photos, readings, moisture, defects, role: actor.role, personId: actor.personId };
+  const place = placeFor(readPlace(url.searchParams.get("place")), shop);
+  const readiness = boardReadiness(moisture, shop, place, systemClock.now());
+  const worked = { readiness, movement: boardMovement(board, place), weight: boardWeight(board) };
+  return { board, events, photos, readings, moisture, defects, worked, role: actor.role, personId: actor.personId };
 }
 
 export default function BoardPage({ loaderData }: Route.ComponentProps) {
-  const { board, events, photos, readings, moisture, defects, role, personId } = loaderData;
+  const { board, events, photos, readings, moisture, defects, worked, role, personId } = loaderData;
   const boardId = board.id;
   return (
     <article>
@@ -60,12 +70,14 @@ export default function BoardPage({ loaderData }: Route.ComponentProps) {
           </Card>
           <RingCard board={board} readings={readings} mayRead={can(role, "rings:read")} />
           <PhotoStrip boardId={boardId} tag={board.tag} photos={photos} mayRemove={can(role, "photo:remove")} />
-          <MoistureCard readings={moisture} />
+          <MoistureCard boardId={boardId} readings={moisture} readiness={worked.readiness} />
+          <MovementCard species={board.species} movement={worked.movement} />
           <DefectList board={board} defects={defects} mayNote={can(role, "board:correct")} />
           <BoardHistory events={events} />
         </div>
         <div className="contents gap-4 lg:sticky lg:top-4 lg:grid">
           <BoardFacts board={board} role={role} />
+          <WeightCard weight={worked.weight} />
           <div className="flex flex-wrap gap-2">
             {can(role, "tag:print") ? (
               <ButtonLink to={`${href("/tags")}?board=${boardId}`}>Print the tag</ButtonLink>

@@ -51,7 +51,9 @@ export async function confirmDocument(
   documentId: string,
 ): Promise<DocumentConfirmed> {
   const waiting = await getDocument(db, actor, documentId, "waiting");
-  if (!waiting) return { ok: false, why: "missing" };
+  // Said twice, it is taken in once, and both are told so.
+  if (!waiting)
+    return (await getDocument(db, actor, documentId, "ready")) ? { ok: true } : { ok: false, why: "missing" };
   const arrived = await readUpload(storage, waiting.objectKey, mostDocumentBytes);
   // One that has not arrived may still: its row waits for another try.
   if (!arrived.ok && arrived.why === "not arrived") return arrived;

@@ -7,7 +7,7 @@ const inColumn = keptDraft.omit({ version: true });
 const nothing = { rows: [], writer: "", byName: "", at: null };
 
 export interface DraftState {
-  /** When the delivery was tallied; its draft is then gone. */
+  /** When the delivery was tallied last; what was typed before is then gone. */
   talliedAt: Date | null;
   draft: KeptDraft;
 }
@@ -37,8 +37,9 @@ export type DraftKept =
   | { kept: false; why: "tallied" };
 
 /**
- * Keeps a half-typed tally, unless another page has kept a newer one meanwhile, which comes back, or the delivery is tallied.
+ * Keeps a half-typed tally, unless another page has kept a newer one meanwhile, which comes back, or the delivery was tallied meanwhile.
  *
+ * @param draft.after when the delivery was tallied last as far as this page knows; null for its first tally.
  * @param draft.version the version it was typed over.
  * @returns null when the delivery is not in this shop.
  */
@@ -46,16 +47,17 @@ export async function keepTallyDraft(
   db: Knex,
   actor: Pick<Actor, "shopId" | "personName">,
   deliveryId: string,
-  draft: { rows: TallyRow[]; version: number; writer: string },
+  draft: { rows: TallyRow[]; version: number; writer: string; after: Date | null },
   now: Date,
 ): Promise<DraftKept | null> {
   const kept = { rows: draft.rows, writer: draft.writer, byName: actor.personName, at: now.toISOString() };
   const changed = await db("deliveries")
     .where({ id: deliveryId, shop_id: actor.shopId, tally_draft_version: draft.version, deleted_at: null })
-    .whereNull("tallied_at")
+    .whereRaw("tallied_at <=> ?", [draft.after])
     .update({ tally_draft: JSON.stringify(kept), tally_draft_version: draft.version + 1 });
   if (changed === 1) return { kept: true, version: draft.version + 1 };
   const current = await readTallyDraft(db, actor, deliveryId);
   if (!current) return null;
-  return current.talliedAt ? { kept: false, why: "tallied" } : { kept: false, why: "newer", draft: current.draft };
+  const isTallied = current.talliedAt?.getTime() !== draft.after?.getTime();
+  return isTallied ? { kept: false, why: "tallied" } : { kept: false, why: "newer", draft: current.draft };
 }

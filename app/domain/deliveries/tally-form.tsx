@@ -24,12 +24,17 @@ interface TallyFormProps {
 export function TallyForm({ delivery, draft }: TallyFormProps) {
   const { units } = useShop();
   const submit = useSubmit();
+  const after = delivery.talliedAt?.toISOString() ?? null;
   const carried = { quarters: String(delivery.quarters), species: delivery.species };
-  const { grid, change, isReady, state, flush, keepMine, takeTheirs } = useTally(delivery.id, draft, carried);
+  const { grid, change, isReady, state, flush, keepMine, takeTheirs } = useTally(
+    { deliveryId: delivery.id, after },
+    draft,
+    carried,
+  );
   const [isTried, setTried] = useState(false);
   const [isFlushing, setFlushing] = useState(false);
   const totals = useMemo(() => totalRows(grid.rows, units), [grid.rows, units]);
-  const claim = checkClaim(delivery, totals);
+  const claim = after === null ? checkClaim(delivery, totals) : null;
   const rows = grid.rows.filter((row) => !isBlank(row));
   const isSaving = useNavigation().state !== "idle" || isFlushing;
 
@@ -50,6 +55,7 @@ export function TallyForm({ delivery, draft }: TallyFormProps) {
       <TallyNotices deliveryId={delivery.id} state={state} ownRows={rows.length} {...{ keepMine, takeTheirs }} />
       {/* High enough that the footer stays where it is while messages come and go: a tap on Save must not miss it. */}
       <Form method="post" onSubmit={save} className="flex min-h-[72dvh] flex-col">
+        <input type="hidden" name="after" value={after ?? ""} />
         <input type="hidden" name="rows" value={JSON.stringify(rows.map(({ key: _, ...row }) => row))} />
         <Card className="-mx-4 rounded-none border-x-0 sm:mx-0 sm:rounded-xl sm:border-x">
           <TallyGrid

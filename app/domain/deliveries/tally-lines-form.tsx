@@ -2,9 +2,10 @@ import { Button } from "#app/components/button.tsx";
 import { TextArea } from "#app/components/field.tsx";
 
 /** The same tally as lines of text, for a browser that runs no scripts. */
-export function TallyLinesForm({ lines }: { lines: string }) {
+export function TallyLinesForm({ lines, talliedAt }: { lines: string; talliedAt: Date | null }) {
   return (
     <form method="post" className="grid gap-4">
+      <input type="hidden" name="after" value={talliedAt?.toISOString() ?? ""} />
       <TextArea
         label="Boards, one size a line"
         name="lines"

@@ -1,11 +1,17 @@
-import { type LocalDraft, localDraft } from "./tally-draft.ts";
+import { isEmptyTally, type LocalDraft, localDraft } from "./tally-draft.ts";
+import type { TallyOf } from "./tally-requests.ts";
 
-const keyOf = (deliveryId: string) => `rayfleck tally ${deliveryId}`;
+const beginning = (deliveryId: string) => `rayfleck tally ${deliveryId} `;
+const keyOf = ({ deliveryId, after }: TallyOf) => beginning(deliveryId) + (after ?? "first");
 
-/** The tally of a delivery that this device holds, or null. A browser that keeps nothing holds none. */
-export function readOnDevice(deliveryId: string): LocalDraft | null {
+/** The tally that this device holds, or null. A browser that keeps nothing holds none. */
+export function readOnDevice(of: TallyOf): LocalDraft | null {
+  return readKey(keyOf(of));
+}
+
+function readKey(key: string): LocalDraft | null {
   try {
-    const parsed = localDraft.safeParse(JSON.parse(localStorage.getItem(keyOf(deliveryId)) ?? "null"));
+    const parsed = localDraft.safeParse(JSON.parse(localStorage.getItem(key) ?? "null"));
     return parsed.success ? parsed.data : null;
   } catch {
     return null;
@@ -13,19 +19,39 @@ export function readOnDevice(deliveryId: string): LocalDraft | null {
 }
 
 /** Keeps a tally on this device. @returns false where the browser keeps nothing or is full. */
-export function writeOnDevice(deliveryId: string, draft: LocalDraft): boolean {
+export function writeOnDevice(of: TallyOf, draft: LocalDraft): boolean {
   try {
-    localStorage.setItem(keyOf(deliveryId), JSON.stringify(draft));
+    localStorage.setItem(keyOf(of), JSON.stringify(draft));
     return true;
   } catch {
     return false;
   }
 }
 
-export function forgetOnDevice(deliveryId: string): void {
+/**
+ * Forgets the tallies of a delivery that were saved meanwhile, but not rows that never reached the shop: those come back.
+ *
+ * @param of the tally that would come next.
+ */
+export function leftOnDevice(of: TallyOf): LocalDraft["rows"] {
+  return earlierKeys(of).flatMap((key) => {
+    const held = readKey(key);
+    if (held?.unsent && !isEmptyTally(held.rows)) return held.rows;
+    localStorage.removeItem(key);
+    return [];
+  });
+}
+
+/** Forgets the tallies of a delivery before the one that would come next, whatever is in them. */
+export function forgetLeft(of: TallyOf): void {
+  for (const key of earlierKeys(of)) localStorage.removeItem(key);
+}
+
+function earlierKeys(of: TallyOf): string[] {
   try {
-    localStorage.removeItem(keyOf(deliveryId));
+    const keys = Array.from({ length: localStorage.length }, (_, index) => localStorage.key(index) ?? "");
+    return keys.filter((key) => key.startsWith(beginning(of.deliveryId)) && key !== keyOf(of));
   } catch {
-    // A browser that keeps nothing has nothing to forget.
+    return [];
   }
 }

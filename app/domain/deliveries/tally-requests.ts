@@ -9,22 +9,29 @@ const answers = z.union([
   z.object({ kept: z.literal(false), why: z.literal("newer"), draft: keptDraft }),
   z.object({ kept: z.literal(false), why: z.literal("tallied") }),
 ]);
-const seen = z.object({ isTallied: z.boolean(), draft: keptDraft });
+const seen = z.object({ talliedAt: z.string().nullable(), draft: keptDraft });
 
 const addressOf = (deliveryId: string) => href("/api/deliveries/:deliveryId/tally-draft", { deliveryId });
 
 /** Longer than this and a phone at the tailgate has no connection worth the name. */
 const patienceMs = 15_000;
 
+/** Which tally: of which delivery, and after which one before it, if there was one. */
+export interface TallyOf {
+  deliveryId: string;
+  /** ISO moment of the tally before; null for the first. */
+  after: string | null;
+}
+
 /** Sends a half-typed tally to the server. */
 export async function sendDraft(
-  deliveryId: string,
+  { deliveryId, after }: TallyOf,
   draft: { rows: TallyRow[]; version: number; writer: string },
 ): Promise<SendAnswer> {
   const answer = await fetch(addressOf(deliveryId), {
     method: "POST",
     headers: { "Content-Type": "application/json" },
-    body: JSON.stringify(draft),
+    body: JSON.stringify({ ...draft, after }),
     signal: AbortSignal.timeout(patienceMs),
   }).catch(() => null);
   if (!answer || answer.status >= 500) return { at: "unreachable" };
@@ -35,8 +42,11 @@ export async function sendDraft(
 }
 
 /** The tally as the server keeps it now; null when it cannot be reached. */
-export async function lookAtDraft(deliveryId: string): Promise<{ isTallied: boolean; draft: KeptDraft } | null> {
+export async function lookAtDraft({
+  deliveryId,
+  after,
+}: TallyOf): Promise<{ isTallied: boolean; draft: KeptDraft } | null> {
   const answer = await fetch(addressOf(deliveryId), { signal: AbortSignal.timeout(patienceMs) }).catch(() => null);
   const parsed = seen.safeParse(await answer?.json().catch(() => null));
-  return parsed.success ? parsed.data : null;
+  return parsed.success ? { isTallied: parsed.data.talliedAt !== after, draft: parsed.data.draft } : null;
 }

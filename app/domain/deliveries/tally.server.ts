@@ -6,6 +6,7 @@ import { searchText } from "#app/domain/boards/search-text.ts";
 import type { Actor } from "#app/domain/shop/actor.ts";
 import { withTransaction } from "#app/services/db.server.ts";
 import { newId } from "#app/services/ids.server.ts";
+import { shareCostAgain } from "./deliveries.server.ts";
 import { getDelivery } from "./deliveries.sql.server.ts";
 import type { Delivery } from "./delivery.ts";
 import { boardCostsMinor } from "./delivery-cost.ts";
@@ -17,8 +18,10 @@ export type TallySaved =
   | { ok: false; why: "tallied"; at: Date };
 
 /**
- * Makes the boards of a delivery from its tally, with consecutive tag numbers, in one transaction: all of them or none. A delivery is tallied once;
- * the second of two people saving at once is told so.
+ * Makes the boards of a delivery from its tally, with consecutive tag numbers, in one transaction: all of them or none. The second of two people
+ * saving at once is told so. Boards that were missed are added the same way, and the cost is then shared out anew over all of them.
+ *
+ * @param after when the delivery was tallied last as far as this person knows; null for its first tally.
  */
 export async function saveTally(
   db: Knex,
@@ -26,6 +29,7 @@ export async function saveTally(
   deliveryId: string,
   lines: TallyLine[],
   now: Date,
+  after: Date | null = null,
 ): Promise<TallySaved> {
   const singles = lines.flatMap((line) => Array.from({ length: line.count }, () => line));
   if (singles.length === 0) return { ok: false, why: "empty" };
@@ -37,9 +41,10 @@ export async function saveTally(
       .first("tallied_at");
     const delivery = locked ? await getDelivery(trx, actor, deliveryId) : null;
     if (!locked || !delivery) return { ok: false, why: "missing" };
-    if (locked.tallied_at) return { ok: false, why: "tallied", at: locked.tallied_at };
+    const talliedAt: Date | null = locked.tallied_at;
+    if (talliedAt && talliedAt.getTime() !== after?.getTime()) return { ok: false, why: "tallied", at: talliedAt };
     const first = await takeTagNumbers(trx, actor, singles.length);
-    const costs = boardCostsMinor(delivery, singles);
+    const costs = talliedAt ? null : boardCostsMinor(delivery, singles);
     const rows = singles.map((line, index) => boardRow(actor, delivery, line, first + index, costs?.[index] ?? null));
     await trx.batchInsert("boards", rows, 500);
     await writeEvents(
@@ -60,6 +65,7 @@ export async function saveTally(
         changed_at: now,
         version: trx.raw("version + 1"),
       });
+    if (talliedAt) await shareCostAgain(trx, actor, deliveryId);
     return {
       ok: true,
       boardIds: rows.map((row) => row.id),

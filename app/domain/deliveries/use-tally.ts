@@ -3,7 +3,7 @@ import type { TallyRow } from "./tally.ts";
 import { chooseDraft, type KeptDraft } from "./tally-draft.ts";
 import { createTallyKeeper, type KeeperState, type TallyKeeper } from "./tally-keeper.ts";
 import { readOnDevice, writeOnDevice } from "./tally-on-device.ts";
-import { lookAtDraft, sendDraft } from "./tally-requests.ts";
+import { lookAtDraft, sendDraft, type TallyOf } from "./tally-requests.ts";
 import { changeGrid, type Grid, type GridAction, openGrid } from "./tally-rows.ts";
 
 export interface OpenTally {
@@ -20,7 +20,7 @@ export interface OpenTally {
 
 /** The rows of a tally being typed, kept on this device and on the server. */
 export function useTally(
-  deliveryId: string,
+  { deliveryId, after }: TallyOf,
   server: KeptDraft,
   carried: Pick<TallyRow, "quarters" | "species">,
 ): OpenTally {
@@ -33,15 +33,16 @@ export function useTally(
 
   useEffect(() => {
     const { server, carried } = opened.current;
-    const local = readOnDevice(deliveryId);
+    const of = { deliveryId, after };
+    const local = readOnDevice(of);
     const choice = chooseDraft(local, server);
     const rows = choice === "server" || !local ? server.rows : local.rows;
     const own = createTallyKeeper(
       {
         writer: crypto.randomUUID(),
-        send: (draft) => sendDraft(deliveryId, draft),
-        look: () => lookAtDraft(deliveryId),
-        write: (draft) => writeOnDevice(deliveryId, draft),
+        send: (draft) => sendDraft(of, draft),
+        look: () => lookAtDraft(of),
+        write: (draft) => writeOnDevice(of, draft),
         onState: setState,
       },
       { rows, base: server.version, unsent: choice === "local" },
@@ -59,7 +60,7 @@ export function useTally(
       window.removeEventListener("online", back);
       own.stop();
     };
-  }, [deliveryId]);
+  }, [deliveryId, after]);
 
   useEffect(() => {
     if (isReady) keeper.current?.typed(grid.rows.map(withoutKey));

@@ -11,13 +11,14 @@ const body = z.object({
   rows: tallyRows,
   version: z.number().int().min(0).max(4_000_000_000),
   writer: z.string().min(1).max(40),
+  after: z.coerce.date().nullable(),
 });
 
 /** The half-typed tally of a delivery as it is kept now, for a page that was away. */
 export async function loader({ params, context }: Route.LoaderArgs) {
   const { actor } = requireRole(context, "delivery:tally");
   const { talliedAt, draft } = requireFound(await readTallyDraft(context.get(dbContext), actor, params.deliveryId));
-  return { isTallied: talliedAt !== null, draft };
+  return { talliedAt: talliedAt?.toISOString() ?? null, draft };
 }
 
 /** Keeps a half-typed tally. 409 with the newer one when another page kept that meanwhile. */

@@ -90,7 +90,9 @@ export default function DeliveryPage({ loaderData }: Route.ComponentProps) {
           </>
         }
       />
-      {delivery.talliedAt ? <LeftoverTally deliveryId={delivery.id} /> : null}
+      {delivery.talliedAt ? (
+        <LeftoverTally deliveryId={delivery.id} talliedAt={delivery.talliedAt.toISOString()} />
+      ) : null}
       {loaderData.justTallied && tags ? (
         <Notice kind="good" title={tagWords(measured.count, tags)} className="mb-4">
           Print the tags and staple them on before the boards go up.
@@ -105,9 +107,16 @@ export default function DeliveryPage({ loaderData }: Route.ComponentProps) {
           )}
           {boards.total > 0 ? (
             <section>
-              <h2 className="mb-2 text-xl">
-                Its boards <span className="text-ink-soft">{boards.total}</span>
-              </h2>
+              <header className="mb-2 flex flex-wrap items-end justify-between gap-x-4">
+                <h2 className="text-xl">
+                  Its boards <span className="text-ink-soft">{boards.total}</span>
+                </h2>
+                {loaderData.mayTally ? (
+                  <ButtonLink look="quiet" to={`${href("/deliveries/:deliveryId/tally", at)}?more`}>
+                    Add boards that were missed
+                  </ButtonLink>
+                ) : null}
+              </header>
               <BoardList boards={boards.boards} />
               <Pager page={boards.page} pages={boards.pages} label={`Pages of ${boardsPerPage} boards`} />
             </section>

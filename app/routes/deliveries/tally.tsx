@@ -22,11 +22,13 @@ import { notHere, requireFound, requireRole } from "#app/server/guards.server.ts
 import { systemClock } from "#app/services/clock.server.ts";
 import type { Route } from "./+types/tally.ts";
 
-export async function loader({ params, context }: Route.LoaderArgs) {
+export async function loader({ params, context, url }: Route.LoaderArgs) {
   const { actor } = requireRole(context, "delivery:tally");
   const db = context.get(dbContext);
   const delivery = requireFound(await getDelivery(db, actor, params.deliveryId));
-  if (delivery.talliedAt) throw redirect(href("/deliveries/:deliveryId", { deliveryId: delivery.id }));
+  // Boards that were missed are added to a tallied delivery only by somebody who asked for that.
+  if (delivery.talliedAt && !url.searchParams.has("more"))
+    throw redirect(href("/deliveries/:deliveryId", { deliveryId: delivery.id }));
   const { draft } = requireFound(await readTallyDraft(db, actor, delivery.id));
   return { delivery, draft };
 }
@@ -38,16 +40,22 @@ export async function action({ params, request, context }: Route.ActionArgs) {
   const delivery = requireFound(await getDelivery(db, actor, params.deliveryId));
   const carried = { quarters: String(delivery.quarters), species: delivery.species };
   const form = await request.formData();
+  const after = momentOf(form.get("after"));
   const text = String(form.get("lines") ?? "").slice(0, 100_000);
   const rows = form.has("lines") ? readTallyText(text, carried) : gridRows(form.get("rows"));
   if (!rows) return data({ problems: [], lines: text, refused: { why: "wrong shape" as const } }, { status: 400 });
   const read = readTally(rows, shop.units);
   if (!read.ok) return data({ problems: read.problems, lines: text, refused: null }, { status: 400 });
-  const saved = await saveTally(db, actor, delivery.id, read.lines, systemClock.now());
+  const saved = await saveTally(db, actor, delivery.id, read.lines, systemClock.now(), after);
   if (saved.ok) return redirect(`${href("/deliveries/:deliveryId", { deliveryId: delivery.id })}?tallied`);
   if (saved.why === "missing") notHere();
   const status = saved.why === "tallied" ? 409 : 400;
   return data({ problems: [], lines: text, refused: saved }, { status });
+}
+
+/** Which tally the form was made after, or null for the first. A moment that is none fits no tally. */
+function momentOf(posted: FormDataEntryValue | null): Date | null {
+  return posted ? new Date(String(posted)) : null;
 }
 
 /** The grid's rows as posted, numbered as they stood; null when that is no grid. */
@@ -65,11 +73,13 @@ export default function TallyPage({ loaderData, actionData }: Route.ComponentPro
   const { units } = useShop();
   const carried = { quarters: String(delivery.quarters), species: delivery.species };
   const claimed =
-    delivery.claimedVolume === null ? null : `${printVolume(delivery.claimedVolume, delivery.claimedUnit)} claimed`;
+    delivery.claimedVolume === null || delivery.talliedAt
+      ? null
+      : `${printVolume(delivery.claimedVolume, delivery.claimedUnit)} claimed`;
   return (
     <>
       <PageHead
-        title="Tally"
+        title={delivery.talliedAt ? "Add boards" : "Tally"}
         over={[delivery.supplierName, printDay(delivery.receivedOn), delivery.reference].filter(Boolean).join(" · ")}
         lead={[`${printQuarters(delivery.quarters)} ${speciesName(delivery.species)}`, claimed]
           .filter(Boolean)
@@ -79,10 +89,13 @@ export default function TallyPage({ loaderData, actionData }: Route.ComponentPro
       {actionData?.refused ? <Refused deliveryId={delivery.id} refused={actionData.refused} /> : null}
       <div className="noscript:hidden">
         <TallyHelp unit={units} />
-        <TallyForm delivery={delivery} draft={draft} />
+        <TallyForm key={delivery.talliedAt?.getTime()} delivery={delivery} draft={draft} />
       </div>
       <noscript>
-        <TallyLinesForm lines={actionData?.lines || printTallyText(draft.rows, carried)} />
+        <TallyLinesForm
+          talliedAt={delivery.talliedAt}
+          lines={actionData?.lines || printTallyText(draft.rows, carried)}
+        />
       </noscript>
     </>
   );

@@ -83,6 +83,7 @@ export default [
       route("boards/:boardId/availability", "routes/api/availability.ts"),
       route("boards/:boardId/photos", "routes/api/begin-photo.ts"),
       route("photos/:photoId/confirm", "routes/api/confirm-photo.ts"),
+      route("photos/:photoId/rings", "routes/api/read-rings.ts"),
       route("deliveries/:deliveryId/tally-draft", "routes/api/tally-draft.ts"),
       route("deliveries/:deliveryId/documents", "routes/api/begin-document.ts"),
       route("documents/:documentId/confirm", "routes/api/confirm-document.ts"),

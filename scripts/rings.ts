@@ -1,7 +1,8 @@
 import { existsSync } from "node:fs";
 import { type EndCorners, wholePicture } from "#app/core/endgrain/corner-check.ts";
+import { findCorners } from "#app/core/endgrain/find-corners.ts";
 import { readEnd } from "#app/core/endgrain/read-end.ts";
-import { decodePhoto } from "#scripts/endgrain/decode-photo.ts";
+import { decodePhoto } from "#app/services/decode-photo.server.ts";
 import { parseRingsCommand, type RingsCommand } from "#scripts/endgrain/rings-command.ts";
 
 /** Reads the rings of each image named and prints one JSON object a line; leaves with 1 when any could not be read. */
@@ -25,11 +26,23 @@ async function readImage(image: string, command: RingsCommand): Promise<Record<s
   const photo = await decodePhoto(image, command.corners).catch(() => null);
   if (!photo) return { image, error: "The file is no picture that can be read." };
   const { scaleX, scaleY } = photo;
-  const corners = command.corners?.map((p) => ({ x: p.x * scaleX, y: p.y * scaleY })) as EndCorners | undefined;
+  const given = command.corners?.map((p) => ({ x: p.x * scaleX, y: p.y * scaleY })) as EndCorners | undefined;
+  const proposed = given ? null : findCorners(photo.pixels);
+  if (proposed?.found === "unclear") {
+    return {
+      image,
+      error: "The board's end does not fill the picture and its corners could not be found: give them with --corners.",
+      problem: "corners-unclear",
+    };
+  }
   const { widthMm, thicknessMm } = command;
-  const reading = readEnd(photo.pixels, { corners, widthMm, thicknessMm });
+  const reading = readEnd(photo.pixels, { corners: given ?? proposed!.corners, widthMm, thicknessMm });
   if (!reading.ok) return { image, error: reading.message, problem: reading.problem };
-  const own = command.corners ?? (corners ? reading.corners : wholePicture(photo));
+  const own =
+    command.corners ??
+    (proposed!.found === "whole"
+      ? wholePicture(photo)
+      : reading.corners.map((p) => ({ x: p.x / scaleX, y: p.y / scaleY })));
   const lengthX = widthMm ? 1 : 1 / scaleX;
   const lengthY = thicknessMm ? 1 : 1 / scaleY;
   return {

@@ -46,7 +46,7 @@ export function ShopHeader({ shopName, personName, role, sees, find }: ShopHeade
           <Tab to="/projects">Projects</Tab>
           <Tab to="/calculators">Calculators</Tab>
         </nav>
-        <div className="order-4 w-full md:order-2 md:ml-auto md:w-64">{find}</div>
+        <div className="order-4 w-full md:order-2 md:ml-auto md:w-40 lg:w-64">{find}</div>
       </div>
     </header>
   );
@@ -57,7 +57,7 @@ function Tab({ to, children }: { to: string; children: string }) {
     <NavLink
       to={to}
       className={({ isActive }) =>
-        `inline-flex min-h-11 shrink-0 items-center rounded-lg px-3.5 text-bar-ink no-underline hover:bg-bar-chosen ${isActive ? "bg-bar-chosen font-semibold" : ""}`
+        `inline-flex min-h-11 shrink-0 items-center rounded-lg px-2.5 lg:px-3.5 text-bar-ink no-underline hover:bg-bar-chosen ${isActive ? "bg-bar-chosen font-semibold" : ""}`
       }
     >
       {children}

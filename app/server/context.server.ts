@@ -4,6 +4,7 @@ import { createContext } from "react-router";
 import type { Actor } from "#app/domain/shop/actor.ts";
 import type { ShopSettings } from "#app/domain/shop/shop.ts";
 import type { Mailer } from "#app/services/mail.server.ts";
+import type { RingReader } from "#app/services/ring-reader.server.ts";
 import type { Storage } from "#app/services/storage.server.ts";
 
 /** The database handle for this request. Tests hand in a transaction. */
@@ -11,6 +12,9 @@ export const dbContext = createContext<Knex>();
 
 /** Where files are kept. */
 export const storageContext = createContext<Storage>();
+
+/** What reads rings off photos, beside this process. */
+export const ringReaderContext = createContext<RingReader>();
 
 /** How letters are sent. */
 export const mailerContext = createContext<Mailer>();

@@ -4,9 +4,17 @@ import { appDb } from "#app/services/db.server.ts";
 import { env } from "#app/services/env.server.ts";
 import { log } from "#app/services/log.server.ts";
 import { appMailer } from "#app/services/mail.server.ts";
+import { appRingReader } from "#app/services/ring-reader.server.ts";
 import { appStorage } from "#app/services/storage.server.ts";
 import { contentSecurityPolicy } from "./content-security-policy.server.ts";
-import { dbContext, logContext, mailerContext, nonceContext, storageContext } from "./context.server.ts";
+import {
+  dbContext,
+  logContext,
+  mailerContext,
+  nonceContext,
+  ringReaderContext,
+  storageContext,
+} from "./context.server.ts";
 
 /** One line a request, without personal data: what was asked, how it ended, how long it took. */
 export const requestLog: MiddlewareFunction<Response> = async ({ request, context, pattern }, next) => {
@@ -21,11 +29,12 @@ export const requestLog: MiddlewareFunction<Response> = async ({ request, contex
   return response;
 };
 
-/** Puts the process's database, file store and mailer within reach of loaders and actions. Tests set their own before the root runs. */
+/** Puts the process's database, file store, mailer and ring reader within reach of loaders and actions. Tests set their own before the root runs. */
 export const outside: MiddlewareFunction<Response> = ({ context }) => {
   context.set(dbContext, appDb());
   context.set(storageContext, appStorage());
   context.set(mailerContext, appMailer());
+  context.set(ringReaderContext, appRingReader());
 };
 
 /** Headers that every answer carries. Pages are never kept by a cache that others share; files set their own policy. */

@@ -2,7 +2,7 @@ import { luminance } from "#app/core/endgrain/contrast.ts";
 import type { EndPixels } from "#app/core/endgrain/pixels.ts";
 import { readEnd } from "#app/core/endgrain/read-end.ts";
 import type { ClassShares, RingClass } from "#app/core/rings/ring-types.ts";
-import { decodePhoto } from "#scripts/endgrain/decode-photo.ts";
+import { decodePhoto } from "#app/services/decode-photo.server.ts";
 import { DEVELOPMENT_FOLDER, type DevelopmentEnd } from "#scripts/endgrain/development-set.ts";
 import { drawGenerated, type GeneratedEnd, generatedTruth } from "#scripts/endgrain/generated-set.ts";
 import { plainStationAngles, plainTensor } from "#scripts/endgrain/plain-tensor.ts";

@@ -1,6 +1,6 @@
 import { describe, expect, it } from "vitest";
 import { readEnd } from "#app/core/endgrain/read-end.ts";
-import { decodePhoto } from "#scripts/endgrain/decode-photo.ts";
+import { decodePhoto } from "#app/services/decode-photo.server.ts";
 import { DEVELOPMENT_FOLDER, developmentEnds, isNearTie } from "#scripts/endgrain/development-set.ts";
 
 const ends = developmentEnds();

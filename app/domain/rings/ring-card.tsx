@@ -1,7 +1,10 @@
 import { href, Link } from "react-router";
 import { Card } from "#app/components/card.tsx";
+import { Notice } from "#app/components/notice.tsx";
 import { When } from "#app/components/when.tsx";
-import { classShares } from "#app/core/rings/summary.ts";
+import { compareEnds, fieldAlong } from "#app/core/rings/along-board.ts";
+import type { RingField } from "#app/core/rings/ring-types.ts";
+import { angleSummary, classShares } from "#app/core/rings/summary.ts";
 import type { Board } from "#app/domain/boards/board.ts";
 import { EndDrawing } from "#app/domain/boards/end-drawing.tsx";
 import { useShop } from "#app/domain/shop/shop-view.tsx";
@@ -31,6 +34,7 @@ export function RingCard({ board, readings, mayRead }: RingCardProps) {
           end.
         </p>
       ) : null}
+      {readings.near && readings.far ? <EndsDiffer near={readings.near.field} far={readings.far.field} /> : null}
       <div className="grid gap-6">
         {boardEnds.map((end) => {
           const reading = readings[end];
@@ -38,6 +42,25 @@ export function RingCard({ board, readings, mayRead }: RingCardProps) {
         })}
       </div>
     </Card>
+  );
+}
+
+/** Below this the ends agree as well as two readings of one end do. Our own estimate. */
+const differFromDeg = 10;
+
+/** A board whose ends differ says so: its middle is neither. */
+function EndsDiffer({ near, far }: { near: RingField; far: RingField }) {
+  const { turnDeg, meanTurnDeg } = compareEnds(near, far);
+  if (turnDeg < differFromDeg) return null;
+  const middle = angleSummary(fieldAlong(near, far, 0.5));
+  const why =
+    Math.abs(meanTurnDeg) > turnDeg / 2
+      ? "All the width turns one way: the tree twists, or the board was sawn out of its line."
+      : "The edges turn apart: the grain runs out of the board.";
+  return (
+    <Notice kind="caution" title={`The ends differ by ${Math.round(turnDeg)}° on average`} className="mb-4">
+      {why} Half way along, the rings stand at about {Math.round(middle.least)}° to {Math.round(middle.greatest)}°.
+    </Notice>
   );
 }
 

@@ -1,9 +1,12 @@
-import { useEffect, useMemo, useRef, useState } from "react";
+import { useEffect, useRef, useState } from "react";
 import { Button } from "#app/components/button.tsx";
-import { type PicturePoint, type RingMarks, readMarks } from "./read-marks.ts";
+import { PhotoMarks } from "./photo-marks.tsx";
+import type { PicturePoint, RingMarks } from "./read-marks.ts";
 import { RingPreview } from "./ring-preview.tsx";
+import { useRingMarks } from "./use-ring-marks.ts";
 
 interface RingMarkerProps {
+  photoId: string;
   /** The photo as shown, and its real size in pixels: marks are kept in those. */
   src: string;
   alt: string;
@@ -13,20 +16,22 @@ interface RingMarkerProps {
   start: RingMarks;
 }
 
-const cornerNames = ["top left", "top right", "bottom right", "bottom left"];
+type Grip = { kind: "corner"; index: number } | { kind: "pith" } | { kind: "stroke"; line: PicturePoint[] };
 
 /**
- * Marking an end-grain photo by hand: four corners of the board's end, then strokes along growth rings. What the marks say is drawn beside them at
- * once; the server reads the same marks again when they are kept.
+ * An end-grain photo with the reader's proposal drawn over it: the corners it found, the rings it sees. A person drags a corner or the pith, or draws
+ * along rings by eye, and the reading follows. What is kept, the server reads again from the same marks.
  */
-export function RingMarker({ src, alt, widthPx, heightPx, board, start }: RingMarkerProps) {
-  const [marks, setMarks] = useState<RingMarks>(start);
-  const [drawing, setDrawing] = useState<PicturePoint[] | null>(null);
-  const [dragged, setDragged] = useState<number | null>(null);
+export function RingMarker({ photoId, src, alt, widthPx, heightPx, board, start }: RingMarkerProps) {
+  const { marks, shown, trouble, reading, ringLines, pith, moveCorner, movePith, addStroke, undoStroke, startOver } =
+    useRingMarks({ photoId, board, start });
+  const [grip, setGrip] = useState<Grip | null>(null);
   const svg = useRef<SVGSVGElement>(null);
   const scale = usePicturePixelsPerScreenPixel(svg, widthPx);
-  const reading = useMemo(() => readMarks(marks, board), [marks, board]);
 
+  function inside({ x, y }: PicturePoint): PicturePoint {
+    return { x: Math.min(widthPx, Math.max(0, x)), y: Math.min(heightPx, Math.max(0, y)) };
+  }
   function at(event: React.PointerEvent): PicturePoint {
     const box = svg.current?.getBoundingClientRect();
     if (!box) return { x: 0, y: 0 };
@@ -35,44 +40,43 @@ export function RingMarker({ src, alt, widthPx, heightPx, board, start }: RingMa
       y: ((event.clientY - box.top) / box.height) * heightPx,
     });
   }
-  function inside({ x, y }: PicturePoint): PicturePoint {
-    return { x: Math.min(widthPx, Math.max(0, x)), y: Math.min(heightPx, Math.max(0, y)) };
-  }
-  function moveCorner(index: number, to: PicturePoint) {
-    setMarks((old) => ({ ...old, corners: old.corners.map((corner, i) => (i === index ? inside(to) : corner)) }));
-  }
-  function onKey(index: number, event: React.KeyboardEvent) {
-    const step = (event.shiftKey ? 10 : 1) * scale * 2;
-    const by = { ArrowLeft: [-step, 0], ArrowRight: [step, 0], ArrowUp: [0, -step], ArrowDown: [0, step] }[event.key];
-    const corner = marks.corners[index];
-    if (!by || !corner) return;
-    event.preventDefault();
-    moveCorner(index, { x: corner.x + (by[0] ?? 0), y: corner.y + (by[1] ?? 0) });
-  }
+  const near = (a: PicturePoint, b: PicturePoint, reachPx: number) =>
+    Math.hypot(a.x - b.x, a.y - b.y) < reachPx * scale;
+
   function onDown(event: React.PointerEvent) {
     event.preventDefault();
     svg.current?.setPointerCapture(event.pointerId);
     const point = at(event);
-    const near = marks.corners.findIndex((corner) => Math.hypot(corner.x - point.x, corner.y - point.y) < 26 * scale);
-    if (near >= 0) setDragged(near);
-    else setDrawing([point]);
+    const corner = marks.corners.findIndex((place) => near(place, point, 26));
+    if (corner >= 0) setGrip({ kind: "corner", index: corner });
+    else if (pith && near(pith, point, 20)) setGrip({ kind: "pith" });
+    else setGrip({ kind: "stroke", line: [point] });
   }
   function onMove(event: React.PointerEvent) {
-    if (dragged !== null) return moveCorner(dragged, at(event));
+    if (!grip) return;
     const point = at(event);
-    setDrawing((line) => {
-      const last = line?.at(-1);
-      return line && last && Math.hypot(point.x - last.x, point.y - last.y) > 4 * scale ? [...line, point] : line;
-    });
+    if (grip.kind === "corner") moveCorner(grip.index, point);
+    else if (grip.kind === "pith") movePith(point);
+    else if (!near(grip.line.at(-1) ?? point, point, 4)) setGrip({ kind: "stroke", line: [...grip.line, point] });
   }
   function onUp() {
-    setDragged(null);
-    const line = drawing;
-    setDrawing(null);
-    const [first] = line ?? [];
-    const last = line?.at(-1);
-    if (line && first && last && Math.hypot(last.x - first.x, last.y - first.y) > 20 * scale)
-      setMarks((old) => ({ ...old, strokes: [...old.strokes, line] }));
+    const [first] = grip?.kind === "stroke" ? grip.line : [];
+    const last = grip?.kind === "stroke" ? grip.line.at(-1) : undefined;
+    if (grip?.kind === "stroke" && first && last && !near(first, last, 20)) addStroke(grip.line);
+    setGrip(null);
+  }
+  function onKey(place: PicturePoint, move: (to: PicturePoint) => void, event: React.KeyboardEvent) {
+    const step = (event.shiftKey ? 10 : 1) * scale * 2;
+    const by: Record<string, [number, number]> = {
+      ArrowLeft: [-step, 0],
+      ArrowRight: [step, 0],
+      ArrowUp: [0, -step],
+      ArrowDown: [0, step],
+    };
+    const [dx, dy] = by[event.key] ?? [0, 0];
+    if (dx === 0 && dy === 0) return;
+    event.preventDefault();
+    move(inside({ x: place.x + dx, y: place.y + dy }));
   }
 
   return (
@@ -90,71 +94,34 @@ export function RingMarker({ src, alt, widthPx, heightPx, board, start }: RingMa
         onPointerCancel={onUp}
       >
         <image href={src} width={widthPx} height={heightPx} preserveAspectRatio="none" />
-        <polygon
-          points={marks.corners.map(({ x, y }) => `${x},${y}`).join(" ")}
-          fill="none"
-          stroke="#ffffff"
-          strokeWidth={4 * scale}
-          strokeLinejoin="round"
+        <PhotoMarks
+          marks={marks}
+          strokes={grip?.kind === "stroke" ? [...marks.strokes, grip.line] : marks.strokes}
+          ringLines={ringLines}
+          pith={pith}
+          scale={scale}
+          held={grip?.kind === "corner" ? grip.index : null}
+          onCornerKey={(index, event) =>
+            marks.corners[index] && onKey(marks.corners[index], (to) => moveCorner(index, to), event)
+          }
+          onPithKey={(event) => pith && onKey(pith, movePith, event)}
         />
-        <polygon
-          points={marks.corners.map(({ x, y }) => `${x},${y}`).join(" ")}
-          fill="none"
-          stroke="#1d4ed8"
-          strokeWidth={2 * scale}
-        />
-        {[...marks.strokes, ...(drawing ? [drawing] : [])].map((line, index) => (
-          <g key={`${index}-${line.length}`}>
-            <polyline
-              points={line.map(({ x, y }) => `${x},${y}`).join(" ")}
-              fill="none"
-              stroke="#ffffff"
-              strokeWidth={7 * scale}
-              strokeLinecap="round"
-              strokeLinejoin="round"
-            />
-            <polyline
-              points={line.map(({ x, y }) => `${x},${y}`).join(" ")}
-              fill="none"
-              stroke="#c2301c"
-              strokeWidth={4 * scale}
-              strokeLinecap="round"
-              strokeLinejoin="round"
-            />
-          </g>
-        ))}
-        {marks.corners.map((corner, index) => (
-          <circle
-            key={cornerNames[index]}
-            cx={corner.x}
-            cy={corner.y}
-            r={12 * scale}
-            fill={dragged === index ? "#1d4ed8" : "#ffffff"}
-            fillOpacity="0.85"
-            stroke="#1d4ed8"
-            strokeWidth={3 * scale}
-            tabIndex={0}
-            role="slider"
-            aria-valuenow={Math.round(corner.x)}
-            aria-valuetext={`${Math.round(corner.x)} across, ${Math.round(corner.y)} down`}
-            aria-label={`Corner, ${cornerNames[index]}. Arrow keys move it.`}
-            onKeyDown={(event) => onKey(index, event)}
-          />
-        ))}
       </svg>
       <div className="flex flex-wrap gap-2">
-        <Button
-          type="button"
-          disabled={marks.strokes.length === 0}
-          onClick={() => setMarks((old) => ({ ...old, strokes: old.strokes.slice(0, -1) }))}
-        >
+        <Button type="button" disabled={marks.strokes.length === 0} onClick={undoStroke}>
           Undo the last stroke
         </Button>
-        <Button type="button" onClick={() => setMarks(start)}>
+        <Button type="button" onClick={startOver}>
           Start over
         </Button>
       </div>
-      <RingPreview reading={reading} strokes={marks.strokes.length} species={board.species} />
+      <RingPreview
+        shown={shown}
+        trouble={trouble}
+        reading={reading}
+        strokes={marks.strokes.length}
+        species={board.species}
+      />
     </div>
   );
 }

@@ -5,11 +5,11 @@ import { Notice } from "#app/components/notice.tsx";
 import { getBoard } from "#app/domain/boards/boards.sql.server.ts";
 import { LengthText } from "#app/domain/boards/size-text.tsx";
 import { getPhoto } from "#app/domain/photos/photos.sql.server.ts";
-import { marksForm, readMarks, startingMarks } from "#app/domain/rings/read-marks.ts";
+import { marksForm, startingMarks } from "#app/domain/rings/read-marks.ts";
+import { readingOf } from "#app/domain/rings/reading-of.server.ts";
 import { RingMarker } from "#app/domain/rings/ring-marker.tsx";
 import { keepReading } from "#app/domain/rings/rings.server.ts";
-import { strokesMethod } from "#app/domain/rings/strokes-reading.ts";
-import { dbContext } from "#app/server/context.server.ts";
+import { dbContext, ringReaderContext, storageContext } from "#app/server/context.server.ts";
 import { notHere, requireFound, requireRole } from "#app/server/guards.server.ts";
 import { systemClock } from "#app/services/clock.server.ts";
 import type { Route } from "./+types/mark.ts";
@@ -30,19 +30,10 @@ export async function action({ params, request, context }: Route.ActionArgs) {
   if (photo.boardId !== board.id) notHere();
   const form = marksForm.safeParse(Object.fromEntries(await request.formData()));
   if (!form.success) return data({ why: form.error.issues[0]?.message ?? "" }, { status: 400 });
-  const read = readMarks(form.data.marks, board);
+  const services = { db, storage: context.get(storageContext), reader: context.get(ringReaderContext) };
+  const read = await readingOf(services, actor, board, photo, form.data.marks, shop.classLimits);
   if (!read.ok) return data({ why: read.why }, { status: 400 });
-  const { field, confidence } = read.reading;
-  const boardEnd = photo.kind === "far end" ? "far" : "near";
-  const reading = {
-    boardEnd,
-    source: "strokes",
-    methodVersion: strokesMethod,
-    photoId: photo.id,
-    inputs: form.data.marks,
-    field,
-    confidence,
-  } as const;
+  const { reading } = read;
   await keepReading(db, actor, board.id, reading, shop.classLimits, systemClock.now());
   return redirect(href("/boards/:boardId", { boardId: board.id }));
 }
@@ -56,10 +47,13 @@ export default function MarkRings({ loaderData, actionData }: Route.ComponentPro
       <Card>
         <ol className="mb-4 grid list-inside list-decimal gap-1 text-ink-soft">
           <li>
-            Drag the four corners onto the corners of the board's end: <LengthText mm={board.widthMm} unit={false} /> ×{" "}
-            <LengthText mm={board.thicknessMm} />.
+            Look whether the blue outline is the board's end, <LengthText mm={board.widthMm} unit={false} /> ×{" "}
+            <LengthText mm={board.thicknessMm} />; drag a corner where it is not.
           </li>
-          <li>Draw along two or three growth rings, well apart, from one edge to the other.</li>
+          <li>
+            Look whether the green lines follow the rings. Where they do not, draw along two or three real ones, or drag
+            the pith.
+          </li>
         </ol>
         {actionData ? (
           <Notice kind="wrong" title="Not kept" className="mb-4">
@@ -69,6 +63,7 @@ export default function MarkRings({ loaderData, actionData }: Route.ComponentPro
         <Form method="post" className="grid gap-4">
           <RingMarker
             key={photo.id}
+            photoId={photo.id}
             src={src}
             alt={`${board.tag}, ${photo.kind}: mark its corners and rings`}
             widthPx={photo.widthPx}

@@ -2,6 +2,7 @@ import { describe, expect, test } from "vitest";
 import { aBoard, aProject } from "#tests/factories/board.ts";
 import { anActor } from "#tests/factories/shop.ts";
 import { useTestDb } from "#tests/setup/test-db.ts";
+import { stretchOf } from "./hold.schema.ts";
 import { extendHold, letGo, placeHold, putBack, takeDown } from "./holds.server.ts";
 import { getHold } from "./holds.sql.server.ts";
 
@@ -40,6 +41,17 @@ describe("reserving", () => {
     const { ask, board } = await scene();
     expect((await ask(0, 1219.2)).ok).toBe(true);
     expect((await ask(1219.2, board.lengthMm)).ok).toBe(true);
+  });
+
+  // 10 1/64 in from one end and the rest, 85 63/64 in, from the other: binary arithmetic makes them overlap by a hair.
+  test("what is left of a board can be reserved from its far end", async () => {
+    const { ask, board } = await scene();
+    const nearMm = 254.396875;
+    const far = stretchOf({ part: "far", lengthMm: 2184.003125 }, board.lengthMm);
+    expect(far.fromMm).toBeLessThan(nearMm);
+    expect((await ask(0, nearMm)).ok).toBe(true);
+    expect((await ask(far.fromMm, far.toMm)).ok).toBe(true);
+    expect(await ask(nearMm - 0.000001, nearMm)).toMatchObject({ ok: false, why: "held" });
   });
 
   test("a refusal names other boards that would do as well, and none that is held", async () => {
@@ -88,6 +100,8 @@ describe("reserving", () => {
     const { ask, board, project } = await scene();
     expect(await ask(0, board.lengthMm + 10)).toMatchObject({ ok: false, why: "length" });
     expect(await ask(500, 500)).toMatchObject({ ok: false, why: "length" });
+    expect(await ask(-1, 500)).toMatchObject({ ok: false, why: "length" });
+    expect(await ask(board.lengthMm + 0.01, board.lengthMm + 0.02)).toMatchObject({ ok: false, why: "length" });
     const stranger = await anActor(db(), "owner");
     const asked = { boardId: board.id, projectId: project.id, fromMm: 0, toMm: 100, note: "", expiresAt: inDays(1) };
     expect(await placeHold(db(), stranger, asked, now)).toEqual({ ok: false, why: "missing" });

@@ -1,4 +1,5 @@
 import type { Knex } from "knex";
+import { exactMm } from "#app/core/lengths/length-unit.ts";
 import type { BoardSummary } from "#app/domain/boards/board.ts";
 import { writeEvent } from "#app/domain/boards/board-events.server.ts";
 import { holdMarks, listSimilar, lockBoard } from "#app/domain/boards/boards.sql.server.ts";
@@ -33,17 +34,23 @@ export async function placeHold(
       const project = await projectName(trx, actor, request.projectId);
       if (!board || !project) return { ok: false, why: "missing" };
       if (board.state !== "racked") return { ok: false, why: "not racked", state: board.state };
-      if (request.fromMm < 0 || request.toMm <= request.fromMm || request.toMm > board.lengthMm + 0.05)
+      // Without the noise of binary arithmetic, so that what is measured from the far end may touch what is held from the near one.
+      const asked = {
+        ...request,
+        fromMm: exactMm(request.fromMm),
+        toMm: exactMm(Math.min(request.toMm, board.lengthMm)),
+      };
+      if (asked.fromMm < 0 || asked.toMm <= asked.fromMm || request.toMm > board.lengthMm + 0.05)
         return { ok: false, why: "length", lengthMm: board.lengthMm };
       await lapseHolds(trx, actor, request.boardId, now);
       const claimed = await listHoldsOfBoard(trx, actor, request.boardId, ["held", "out"]);
-      if (claimed.some((hold) => hold.fromMm < request.toMm && request.fromMm < hold.toMm))
-        return heldRefusal(trx, actor, request, board.lengthMm);
-      const holdId = await insertHold(trx, actor, { ...request, toMm: Math.min(request.toMm, board.lengthMm) });
+      if (claimed.some((hold) => hold.fromMm < asked.toMm && asked.fromMm < hold.toMm))
+        return heldRefusal(trx, actor, asked, board.lengthMm);
+      const holdId = await insertHold(trx, actor, asked);
       await writeEvent(trx, actor, request.boardId, "reserved", {
         project,
-        "from (mm)": request.fromMm,
-        "to (mm)": request.toMm,
+        "from (mm)": asked.fromMm,
+        "to (mm)": asked.toMm,
         until: request.expiresAt.toISOString().slice(0, 10),
         note: request.note,
       });

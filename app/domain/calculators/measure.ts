@@ -47,7 +47,7 @@ export function askMeasure(params: URLSearchParams, { units }: ShopForCalculator
     quarters: "8",
     width: inUnits(units, "6 1/4", "158.8"),
     widthFar: "",
-    length: inUnits(units, "8'", "2438"),
+    length: inUnits(units, "8'", "2440"),
     thickness: "",
     count: "1",
     lengths: "whole",

@@ -50,7 +50,7 @@ export function RingsResult({ answer }: { answer: RingsAnswer }) {
   );
 }
 
-export function shareWords({ flat, rift, quartered }: ClassShares): string {
+function shareWords({ flat, rift, quartered }: ClassShares): string {
   const percent = (share: number) => `${Math.round(share * 100)} %`;
   return `flat ${percent(flat)}, rift ${percent(rift)}, quartered ${percent(quartered)}`;
 }

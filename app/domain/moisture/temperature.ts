@@ -12,7 +12,7 @@ export function shopDegrees(celsius: number, units: LengthUnit): number {
 }
 
 /** The shop's degrees in °C. */
-export function celsiusFrom(degrees: number, units: LengthUnit): number {
+function celsiusFrom(degrees: number, units: LengthUnit): number {
   return units === "in" ? ((degrees - 32) * 5) / 9 : degrees;
 }
 

@@ -24,6 +24,15 @@ export function MovementDrawing({ drawn, species, label }: MovementDrawingProps)
       >
         <path d={drawn.after} fill={tints.base} stroke="#5b4a33" strokeWidth="1.5" vectorEffect="non-scaling-stroke" />
         <path d={drawn.rings} fill="none" stroke={tints.latewood} strokeWidth="1.2" vectorEffect="non-scaling-stroke" />
+        {/* A pale line under the crayon, so that it shows on wood and on a dim shop's ground alike. */}
+        <path
+          d={drawn.before}
+          fill="none"
+          stroke="#ffffff"
+          strokeWidth="4"
+          opacity="0.6"
+          vectorEffect="non-scaling-stroke"
+        />
         <path
           d={drawn.before}
           fill="none"

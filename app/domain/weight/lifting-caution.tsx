@@ -4,7 +4,7 @@ import { Notice } from "#app/components/notice.tsx";
  * From this mass up, a board is said to want two people. The NIOSH lifting equation's load constant is 23 kg (51 lb) for one
  * person in the best posture (NIOSH 94-110, 1994; from memory), and a long board is far from the best posture.
  */
-export const twoPeopleFromKg = 23;
+const twoPeopleFromKg = 23;
 
 /** Beside the weight that calls for it. */
 export function LiftingCaution({ massKg }: { massKg: number }) {

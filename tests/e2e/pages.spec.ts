@@ -1,5 +1,5 @@
 import AxeBuilder from "@axe-core/playwright";
-import type { Page } from "@playwright/test";
+import type { ConsoleMessage, Page } from "@playwright/test";
 import { signIn } from "./setup/sign-in.ts";
 import { expect, test } from "./setup/test.ts";
 
@@ -91,6 +91,10 @@ async function judge(page: Page, path: string): Promise<void> {
     const faults: string[] = [];
     const onError = (error: Error) => faults.push(error.message);
     page.on("pageerror", onError);
+    const onConsole = (message: ConsoleMessage) => {
+      if (message.type() === "error" && /Content Security Policy/.test(message.text())) faults.push(message.text());
+    };
+    page.on("console", onConsole);
     await page.goto(path, { waitUntil: "load" });
     await expect(page, path).toHaveTitle(/ · Rayfleck$/);
     await expect(page.locator("h1"), path).toHaveCount(1);
@@ -108,6 +112,7 @@ async function judge(page: Page, path: string): Promise<void> {
     const overrun = await page.evaluate(() => document.documentElement.scrollWidth - window.innerWidth);
     expect.soft(overrun, `${path} runs off the side`).toBeLessThanOrEqual(0);
     page.off("pageerror", onError);
+    page.off("console", onConsole);
     expect.soft(faults, path).toEqual([]);
   });
 }

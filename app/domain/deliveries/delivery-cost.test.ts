@@ -49,7 +49,7 @@ describe("a claim against the tally", () => {
   });
 
   it("prints volumes", () => {
-    expect(printVolume(212.5, "bf")).toBe("212.5 bf");
+    expect(printVolume(1212.504, "bf")).toBe("1,212.5 bf");
     expect(printVolume(0.5, "m3")).toBe("0.500 m³");
   });
 });

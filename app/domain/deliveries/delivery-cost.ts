@@ -47,7 +47,7 @@ export function checkClaim(delivery: Priced, measured: Measured): ClaimCompared 
   return compareClaim({ volume: claimedVolume, unit: claimedUnit }, measured, { price });
 }
 
-/** "212.5 bf", "0.500 m³". */
+/** "1,212.5 bf", "0.500 m³". */
 export function printVolume(volume: number, unit: VolumeUnit): string {
-  return unit === "bf" ? `${Number(volume.toFixed(2))} bf` : `${volume.toFixed(3)} m³`;
+  return unit === "bf" ? `${volume.toLocaleString("en", { maximumFractionDigits: 2 })} bf` : `${volume.toFixed(3)} m³`;
 }

@@ -58,11 +58,7 @@ export function TallyForm({ delivery, draft }: TallyFormProps) {
         <input type="hidden" name="after" value={after ?? ""} />
         <input type="hidden" name="rows" value={JSON.stringify(rows.map(({ key: _, ...row }) => row))} />
         <Card className="-mx-4 rounded-none border-x-0 sm:mx-0 sm:rounded-xl sm:border-x">
-          <TallyGrid
-            {...{ grid, change, totals, isReady, isTried }}
-            unit={units}
-            onEnd={() => document.getElementById(saveButtonId)?.focus()}
-          />
+          <TallyGrid {...{ grid, change, totals, isReady, isTried }} unit={units} onEnd={focusSave} />
         </Card>
         {isTried && totals.unread > 0 ? (
           <Notice kind="wrong" title="Some rows cannot be read yet" className="mt-4">
@@ -79,4 +75,8 @@ export function TallyForm({ delivery, draft }: TallyFormProps) {
       </Form>
     </>
   );
+}
+
+function focusSave(): void {
+  document.getElementById(saveButtonId)?.focus();
 }

@@ -55,6 +55,7 @@ export async function saveTally(
         kind: "received",
         detail: { from: delivery.supplierName, reference: delivery.reference },
       })),
+      now,
     );
     await trx("deliveries")
       .where({ id: deliveryId, shop_id: actor.shopId })

@@ -57,21 +57,6 @@ export default function EditDelivery({ loaderData, actionData }: Route.Component
   return (
     <>
       <PageHead title="Change the delivery" over={`${delivery.supplierName}, ${printDay(delivery.receivedOn)}`} />
-      {stale ? (
-        <Notice kind="wrong" title="This delivery changed while you wrote" className="mb-4">
-          {stale.byName ?? "Somebody"} changed it{stale.at ? <> on {<When at={stale.at} />}</> : null}. What you typed
-          is still here.{" "}
-          <a
-            href={href("/deliveries/:deliveryId", at)}
-            target="_blank"
-            rel="noreferrer"
-            className="text-link underline"
-          >
-            Look at it as it is now
-          </a>
-          , then save again to put yours in its place.
-        </Notice>
-      ) : null}
       {delivery.talliedAt ? (
         <Notice className="mb-4">
           Its boards keep the species, quarters and grade they were tallied with; each is corrected on its own page.
@@ -81,6 +66,21 @@ export default function EditDelivery({ loaderData, actionData }: Route.Component
         {/* After a refusal the version is that of the record one was told about. */}
         <input type="hidden" name="version" value={stale?.version ?? delivery.version} />
         <DeliveryFields fields={fields} suppliers={suppliers} />
+        {stale ? (
+          <Notice kind="wrong" title="This delivery changed while you wrote">
+            {stale.byName ?? "Somebody"} changed it{stale.at ? <> on {<When at={stale.at} />}</> : null}. What you typed
+            is still here.{" "}
+            <a
+              href={href("/deliveries/:deliveryId", at)}
+              target="_blank"
+              rel="noreferrer"
+              className="text-link underline"
+            >
+              Look at it as it is now
+            </a>
+            , then save again to put yours in its place.
+          </Notice>
+        ) : null}
         <div className="flex flex-wrap gap-3">
           <Button look="main" disabled={sending} className="w-full sm:w-auto">
             Save

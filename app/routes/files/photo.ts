@@ -19,7 +19,8 @@ export async function loader({ params, context }: Route.LoaderArgs) {
       "Content-Length": String(file.bytes),
       "Cache-Control": "private, max-age=31536000, immutable",
       // A picture is only ever shown: should a browser take it for a page, nothing in it runs.
-      "Content-Security-Policy": "default-src 'none'; sandbox",
+      // The styles are those with which a browser centres a picture that is a page by itself.
+      "Content-Security-Policy": "default-src 'none'; style-src 'unsafe-inline'; sandbox",
     },
   });
 }

@@ -7,6 +7,7 @@ import type { BoardEvent, BoardEventKind, EventDetail } from "./board-history.ts
  * Writes one line of a board's history, in the transaction of the change itself. Nothing ever edits it: triggers refuse.
  *
  * @param detail plain values, kept as JSON.
+ * @param at when it happened; the database's own clock unless the use case was given a time.
  */
 export async function writeEvent(
   trx: Knex,
@@ -14,8 +15,9 @@ export async function writeEvent(
   boardId: string,
   kind: BoardEventKind,
   detail: EventDetail = {},
+  at?: Date,
 ): Promise<void> {
-  await writeEvents(trx, actor, [{ boardId, kind, detail }]);
+  await writeEvents(trx, actor, [{ boardId, kind, detail }], at);
 }
 
 /** The same for many boards at once: a delivery of two hundred is one statement. */
@@ -23,6 +25,7 @@ export async function writeEvents(
   trx: Knex,
   actor: Pick<Actor, "shopId" | "personId">,
   events: { boardId: string; kind: BoardEventKind; detail: EventDetail }[],
+  at?: Date,
 ): Promise<void> {
   if (events.length === 0) return;
   await trx.batchInsert(
@@ -34,6 +37,7 @@ export async function writeEvents(
       kind,
       detail: JSON.stringify(detail),
       by_person_id: actor.personId,
+      ...(at ? { at } : {}),
     })),
     500,
   );

@@ -70,7 +70,14 @@ export async function keepMoistureReading(
     await trx("boards")
       .where({ id: boardId, shop_id: actor.shopId })
       .update({ moisture_pct: reading.moisturePct, moisture_at: now });
-    await writeEvent(trx, actor, boardId, "metered", { "moisture (%)": reading.moisturePct, place: reading.place });
+    await writeEvent(
+      trx,
+      actor,
+      boardId,
+      "metered",
+      { "moisture (%)": reading.moisturePct, place: reading.place },
+      now,
+    );
     return true;
   });
 }

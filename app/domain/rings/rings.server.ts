@@ -31,12 +31,19 @@ export async function keepReading(
         .where({ id: boardId, shop_id: actor.shopId })
         .update({ ...ringColumns(speaks.field, limits), version: trx.raw("version + 1") });
     const { least, greatest } = angleSummary(reading.field);
-    await writeEvent(trx, actor, boardId, "rings read", {
-      end: reading.boardEnd,
-      how: reading.source,
-      "from (degrees)": Math.round(least),
-      "to (degrees)": Math.round(greatest),
-    });
+    await writeEvent(
+      trx,
+      actor,
+      boardId,
+      "rings read",
+      {
+        end: reading.boardEnd,
+        how: reading.source,
+        "from (degrees)": Math.round(least),
+        "to (degrees)": Math.round(greatest),
+      },
+      now,
+    );
     return true;
   });
 }

@@ -1,10 +1,11 @@
 import { z } from "zod";
+import { identifier } from "#app/core/identifiers/identifier.ts";
 
 const text = (max: number) => z.string().trim().max(max).catch("");
 
 const filterSchema = z.object({
   q: text(80),
-  supplier: text(13),
+  supplier: z.string().regex(identifier).catch(""),
   species: text(60),
   tally: z.enum(["any", "waiting", "done"]).catch("any"),
   sort: z.enum(["newest", "oldest", "supplier"]).catch("newest"),

@@ -1,4 +1,5 @@
 import { z } from "zod";
+import { identifier } from "#app/core/identifiers/identifier.ts";
 import { isSpeciesCode } from "#app/core/species/species.ts";
 import { moneyField } from "#app/domain/shop/money.ts";
 import { dryings, priceBases } from "./delivery.ts";
@@ -15,7 +16,7 @@ function isDay(day: string): boolean {
 export function deliveryForm(shop: { currency: string }) {
   return z
     .object({
-      supplierId: z.string().max(13).default(""),
+      supplierId: z.string().regex(identifier).or(z.literal("")).default(""),
       newSupplier: words(120),
       receivedOn: z
         .string({ error: "When did it come?" })

@@ -34,7 +34,7 @@ export type ReadRow =
 
 /** More rows than a lorry holds: somebody pasted the wrong thing. */
 export const mostRows = 1_000;
-export const mostBoardsPerRow = 500;
+const mostBoardsPerRow = 500;
 /** Boards that one tally makes at most: they are made in one transaction. */
 export const mostBoardsAtOnce = 2_000;
 

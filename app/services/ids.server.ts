@@ -5,9 +5,6 @@ const alphabet = "0123456789abcdefghjkmnpqrstvwxyz";
 
 const idLength = 13;
 
-/** The shape of every primary key, for parsing at the edge. */
-export const idPattern = /^[0-9abcdefghjkmnpqrstvwxyz]{13}$/;
-
 /**
  * A new public identifier: 13 characters of 5 random bits each, 65 bits, so it cannot be guessed.
  * It is the primary key everywhere, on purpose: nothing relies on keys being in order, so rows can be made on any machine.

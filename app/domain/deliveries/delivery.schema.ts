@@ -1,16 +1,11 @@
 import { z } from "zod";
 import { identifier } from "#app/core/identifiers/identifier.ts";
 import { isSpeciesCode } from "#app/core/species/species.ts";
+import { dayField } from "#app/domain/shop/day-field.ts";
 import { moneyField } from "#app/domain/shop/money.ts";
 import { dryings, priceBases } from "./delivery.ts";
 
 const words = (max: number) => z.string().trim().max(max, `At most ${max} characters.`).default("");
-
-/** A day there is: 31 February is none, though a Date would turn it into one in March. */
-function isDay(day: string): boolean {
-  const at = new Date(`${day}T00:00:00Z`);
-  return !Number.isNaN(at.getTime()) && at.toISOString().startsWith(day) && day >= "1900";
-}
 
 /** A delivery as typed from the supplier's papers. The supplier is one of the shop's, or a new name, which counts before the choice. */
 export function deliveryForm(shop: { currency: string }) {
@@ -18,10 +13,7 @@ export function deliveryForm(shop: { currency: string }) {
     .object({
       supplierId: z.string().regex(identifier).or(z.literal("")).default(""),
       newSupplier: words(120),
-      receivedOn: z
-        .string({ error: "When did it come?" })
-        .regex(/^\d{4}-\d{2}-\d{2}$/, "Write the date as year-month-day.")
-        .refine(isDay, "There is no such day."),
+      receivedOn: dayField("When did it come?"),
       reference: words(80),
       species: z.string({ error: "Choose the species." }).refine(isSpeciesCode, "Choose the species."),
       quarters: z.coerce.number({ error: "Choose the quarters." }).int().min(1).max(40),

@@ -1,5 +1,7 @@
 import { z } from "zod";
+import { identifier } from "#app/core/identifiers/identifier.ts";
 import type { LengthUnit } from "#app/core/lengths/parse-length.ts";
+import { dayField } from "#app/domain/shop/day-field.ts";
 import { optionalLengthField } from "#app/domain/shop/length-field.ts";
 import type { Stretch } from "./hold.ts";
 
@@ -9,13 +11,10 @@ const longestDays = 365;
 export function holdForm(unit: LengthUnit) {
   return z
     .object({
-      projectId: z.string({ error: "Choose a project." }).length(13, "Choose a project."),
+      projectId: z.string({ error: "Choose a project." }).regex(identifier, "Choose a project."),
       part: z.enum(["whole", "near", "far"], { error: "Choose how much." }),
       lengthMm: optionalLengthField(unit, { name: "length", leastMm: 10, mostMm: 12_000 }),
-      until: z
-        .string({ error: "Say until when." })
-        .regex(/^\d{4}-\d{2}-\d{2}$/, "Write the date as year-month-day.")
-        .refine((day) => !Number.isNaN(Date.parse(day)), "There is no such day."),
+      until: dayField("Say until when."),
       note: z.string().trim().max(300, "At most 300 characters.").default(""),
     })
     .refine((form) => form.part === "whole" || form.lengthMm !== null, {

@@ -2,19 +2,17 @@ import { z } from "zod";
 import { crayons } from "#app/components/crayon.tsx";
 import type { LengthUnit } from "#app/core/lengths/parse-length.ts";
 import { isSpeciesCode } from "#app/core/species/species.ts";
+import { dayField } from "#app/domain/shop/day-field.ts";
 import { lengthField } from "#app/domain/shop/length-field.ts";
 import { projectStates } from "./project.ts";
-
-const date = z
-  .string()
-  .regex(/^\d{4}-\d{2}-\d{2}$/, "Write the date as year-month-day.")
-  .refine((value) => !Number.isNaN(Date.parse(value)), "There is no such day.");
 
 /** A project as typed. An empty due date is none. */
 export const projectForm = z.object({
   name: z.string({ error: "Name the project." }).trim().min(1, "Name the project.").max(120, "At most 120 characters."),
   client: z.string().trim().max(120, "At most 120 characters.").default(""),
-  dueOn: date.optional().transform((value) => value ?? null),
+  dueOn: dayField("When is it due?")
+    .optional()
+    .transform((value) => value ?? null),
   crayon: z.enum(crayons, { error: "Choose a crayon." }),
   state: z.enum(projectStates).default("planned"),
   notes: z.string().trim().max(4000, "At most 4,000 characters.").default(""),

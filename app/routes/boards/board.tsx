@@ -29,6 +29,8 @@ import { requireFound, requireRole } from "#app/server/guards.server.ts";
 import { systemClock } from "#app/services/clock.server.ts";
 import type { Route } from "./+types/board.ts";
 
+export { revalidateOnConflict as shouldRevalidate } from "#app/components/revalidate-on-conflict.ts";
+
 export async function loader({ params, context, url }: Route.LoaderArgs) {
   const { actor, shop } = requireRole(context, "board:see");
   const db = context.get(dbContext);

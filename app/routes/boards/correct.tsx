@@ -18,6 +18,8 @@ import { dbContext } from "#app/server/context.server.ts";
 import { notHere, requireFound, requireRole } from "#app/server/guards.server.ts";
 import type { Route } from "./+types/correct.ts";
 
+export { revalidateOnConflict as shouldRevalidate } from "#app/components/revalidate-on-conflict.ts";
+
 const titles: Record<CorrectionGroup, string> = {
   wood: "Correct the wood",
   size: "Correct the size",

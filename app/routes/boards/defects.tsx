@@ -5,6 +5,7 @@ import { Button } from "#app/components/button.tsx";
 import { SelectField, TextField } from "#app/components/field.tsx";
 import { fieldProps } from "#app/components/form-field.ts";
 import { Panel } from "#app/components/panel.tsx";
+import { isIdentifier } from "#app/core/identifiers/identifier.ts";
 import { getBoard } from "#app/domain/boards/boards.sql.server.ts";
 import { defectFaces, defectForm, defectKinds, offBoard } from "#app/domain/boards/defect.ts";
 import { noteDefect, removeDefect } from "#app/domain/boards/defects.sql.server.ts";
@@ -24,7 +25,7 @@ export async function action({ params, request, context }: Route.ActionArgs) {
   const formData = await request.formData();
   const remove = formData.get("remove");
   if (typeof remove === "string") {
-    if (!(await removeDefect(db, actor, params.boardId, remove))) notHere();
+    if (!isIdentifier(remove) || !(await removeDefect(db, actor, params.boardId, remove))) notHere();
     return redirect(href("/boards/:boardId", { boardId: params.boardId }));
   }
   const board = requireFound(await getBoard(db, actor, params.boardId));

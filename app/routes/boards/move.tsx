@@ -3,6 +3,7 @@ import { z } from "zod";
 import { Button, ButtonLink } from "#app/components/button.tsx";
 import { SelectField } from "#app/components/field.tsx";
 import { Panel } from "#app/components/panel.tsx";
+import { identifier } from "#app/core/identifiers/identifier.ts";
 import { moveBoard } from "#app/domain/boards/boards.server.ts";
 import { listBays } from "#app/domain/rack/rack.sql.server.ts";
 import { armName } from "#app/domain/rack/rack.ts";
@@ -10,7 +11,7 @@ import { dbContext } from "#app/server/context.server.ts";
 import { notHere, requireRole } from "#app/server/guards.server.ts";
 import type { Route } from "./+types/move.ts";
 
-const form = z.object({ armId: z.string().max(13).default("") });
+const form = z.object({ armId: z.string().regex(identifier).or(z.literal("")).default("") });
 
 export async function loader({ context }: Route.LoaderArgs) {
   const { actor } = requireRole(context, "board:move");
@@ -19,8 +20,9 @@ export async function loader({ context }: Route.LoaderArgs) {
 
 export async function action({ params, request, context }: Route.ActionArgs) {
   const { actor } = requireRole(context, "board:move");
-  const { armId } = form.parse(Object.fromEntries(await request.formData()));
-  const moved = await moveBoard(context.get(dbContext), actor, params.boardId, armId || null);
+  const asked = form.safeParse(Object.fromEntries(await request.formData()));
+  if (!asked.success) notHere();
+  const moved = await moveBoard(context.get(dbContext), actor, params.boardId, asked.data.armId || null);
   if (!moved.ok) notHere();
   return redirect(href("/boards/:boardId", { boardId: params.boardId }));
 }

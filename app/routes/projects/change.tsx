@@ -12,6 +12,8 @@ import { dbContext } from "#app/server/context.server.ts";
 import { requireFound, requireRole } from "#app/server/guards.server.ts";
 import type { Route } from "./+types/change.ts";
 
+export { revalidateOnConflict as shouldRevalidate } from "#app/components/revalidate-on-conflict.ts";
+
 export async function loader({ params, context }: Route.LoaderArgs) {
   const { actor } = requireRole(context, "project:change");
   return { project: requireFound(await getProject(context.get(dbContext), actor, params.projectId)) };

@@ -5,6 +5,7 @@ import { Button } from "#app/components/button.tsx";
 import { SelectField, TextField } from "#app/components/field.tsx";
 import { fieldProps } from "#app/components/form-field.ts";
 import { Panel } from "#app/components/panel.tsx";
+import { isIdentifier } from "#app/core/identifiers/identifier.ts";
 import { partForm } from "#app/domain/projects/project.schema.ts";
 import { deletePart, getProject, insertPart } from "#app/domain/projects/projects.sql.server.ts";
 import { useShop } from "#app/domain/shop/shop-view.tsx";
@@ -26,7 +27,7 @@ export async function action({ params, request, context }: Route.ActionArgs) {
   const formData = await request.formData();
   const remove = formData.get("remove");
   if (typeof remove === "string") {
-    if (!(await deletePart(db, actor, projectId, remove))) notHere();
+    if (!isIdentifier(remove) || !(await deletePart(db, actor, projectId, remove))) notHere();
     return redirect(href("/projects/:projectId", { projectId }));
   }
   const submission = parseWithZod(formData, { schema: partForm(shop.units) });

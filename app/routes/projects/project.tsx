@@ -16,6 +16,8 @@ import { dbContext } from "#app/server/context.server.ts";
 import { requireFound, requireRole } from "#app/server/guards.server.ts";
 import type { Route } from "./+types/project.ts";
 
+export { revalidateOnConflict as shouldRevalidate } from "#app/components/revalidate-on-conflict.ts";
+
 export async function loader({ params, context }: Route.LoaderArgs) {
   const { actor } = requireRole(context, "project:see");
   const db = context.get(dbContext);

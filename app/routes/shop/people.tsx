@@ -6,6 +6,7 @@ import { SelectField, TextField } from "#app/components/field.tsx";
 import { Notice } from "#app/components/notice.tsx";
 import { SureButton } from "#app/components/sure-button.tsx";
 import { printDay } from "#app/components/when.tsx";
+import { identifier } from "#app/core/identifiers/identifier.ts";
 import { inviteForm } from "#app/domain/people/people.schema.ts";
 import { changeMember, invite, revokeInvitation } from "#app/domain/people/people.server.ts";
 import { listInvitations, listMembers, type Member } from "#app/domain/people/people.sql.server.ts";
@@ -20,9 +21,9 @@ import type { Route } from "./+types/people.ts";
 
 const form = z.discriminatedUnion("intent", [
   inviteForm.extend({ intent: z.literal("invite") }),
-  z.object({ intent: z.literal("revoke"), invitationId: z.string() }),
-  z.object({ intent: z.literal("role"), personId: z.string(), role: z.enum(roles) }),
-  z.object({ intent: z.literal("remove"), personId: z.string() }),
+  z.object({ intent: z.literal("revoke"), invitationId: z.string().regex(identifier) }),
+  z.object({ intent: z.literal("role"), personId: z.string().regex(identifier), role: z.enum(roles) }),
+  z.object({ intent: z.literal("remove"), personId: z.string().regex(identifier) }),
 ]);
 
 export async function loader({ context }: Route.LoaderArgs) {

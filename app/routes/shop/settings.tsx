@@ -11,6 +11,8 @@ import { dbContext } from "#app/server/context.server.ts";
 import { requireRole } from "#app/server/guards.server.ts";
 import type { Route } from "./+types/settings.ts";
 
+export { revalidateOnConflict as shouldRevalidate } from "#app/components/revalidate-on-conflict.ts";
+
 export function loader({ context, url }: Route.LoaderArgs) {
   const { shop } = requireRole(context, "shop:settings");
   return { shop, saved: url.searchParams.has("saved") };

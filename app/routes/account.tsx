@@ -4,6 +4,7 @@ import { Button, ButtonLink } from "#app/components/button.tsx";
 import { SelectField, TextField } from "#app/components/field.tsx";
 import { FrontDoor } from "#app/components/front-door.tsx";
 import { When } from "#app/components/when.tsx";
+import { identifier } from "#app/core/identifiers/identifier.ts";
 import { deviceName } from "#app/domain/people/device-name.ts";
 import { nameForm } from "#app/domain/people/people.schema.ts";
 import { endOtherSessions, endSessionOf, renamePerson, sessionsOf } from "#app/domain/people/people.sql.server.ts";
@@ -16,7 +17,7 @@ import type { Route } from "./+types/account.ts";
 const form = z.discriminatedUnion("intent", [
   nameForm.extend({ intent: z.literal("name") }),
   z.object({ intent: z.literal("light"), theme: z.enum(["light", "dark", "system"]) }),
-  z.object({ intent: z.literal("end"), sessionId: z.string() }),
+  z.object({ intent: z.literal("end"), sessionId: z.string().regex(identifier) }),
   z.object({ intent: z.literal("end others") }),
 ]);
 

@@ -1,4 +1,5 @@
 import { z } from "zod";
+import { identifier } from "#app/core/identifiers/identifier.ts";
 import { type LengthUnit, parseLength } from "#app/core/lengths/parse-length.ts";
 import { boardStates } from "./board.ts";
 
@@ -8,6 +9,8 @@ import { boardStates } from "./board.ts";
  */
 const text = (max: number) => z.string().trim().max(max).catch("");
 
+const id = z.string().regex(identifier).catch("");
+
 const filterSchema = z.object({
   q: text(80),
   species: text(60),
@@ -16,11 +19,11 @@ const filterSchema = z.object({
   width: text(20),
   rings: z.enum(["flat", "rift", "quartered", "unread"]).optional().catch(undefined),
   state: z.enum([...boardStates, "any"]).catch("racked"),
-  arm: text(13),
+  arm: id,
   moisture: z.coerce.number().min(0).max(100).optional().catch(undefined),
   figure: text(40),
-  project: text(13),
-  delivery: text(13),
+  project: id,
+  delivery: id,
   free: z.enum(["yes"]).optional().catch(undefined),
   sort: z.enum(["newest", "tag", "length", "width", "moisture", "angle"]).catch("newest"),
   page: z.coerce.number().int().min(1).max(100_000).catch(1),

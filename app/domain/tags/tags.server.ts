@@ -1,5 +1,6 @@
 import type { Knex } from "knex";
 import { href } from "react-router";
+import { isIdentifier } from "#app/core/identifiers/identifier.ts";
 import { printLength } from "#app/core/lengths/print-length.ts";
 import { printQuarters } from "#app/core/lengths/quarters.ts";
 import type { BoardSummary } from "#app/domain/boards/board.ts";
@@ -20,7 +21,7 @@ export async function boardsToTag(
   params: URLSearchParams,
   shop: ShopSettings,
 ): Promise<BoardSummary[]> {
-  const ids = params.getAll("board").slice(0, mostTags);
+  const ids = params.getAll("board").filter(isIdentifier).slice(0, mostTags);
   if (ids.length > 0) return listByIds(db, actor, ids);
   const filter = { ...readBoardFilter(params, shop.units), sort: "tag" as const };
   return listSummaries(db, actor, filter, { limit: mostTags, offset: 0 });

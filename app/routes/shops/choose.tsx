@@ -2,13 +2,14 @@ import { Form, href, redirect } from "react-router";
 import { z } from "zod";
 import { ButtonLink } from "#app/components/button.tsx";
 import { FrontDoor } from "#app/components/front-door.tsx";
+import { identifier } from "#app/core/identifiers/identifier.ts";
 import { membershipOf, shopsOf } from "#app/domain/people/people.sql.server.ts";
 import { dbContext } from "#app/server/context.server.ts";
 import { notHere, requireVisit } from "#app/server/guards.server.ts";
 import { chooseShop } from "#app/server/session.server.ts";
 import type { Route } from "./+types/choose.ts";
 
-const form = z.object({ shopId: z.string().length(13) });
+const form = z.object({ shopId: z.string().regex(identifier) });
 
 export async function loader({ context, url }: Route.LoaderArgs) {
   const visit = requireVisit(context, url);

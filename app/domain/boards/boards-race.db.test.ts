@@ -152,7 +152,7 @@ describe("a deadlock", () => {
         .where({ id: busy.id })
         .update({ notes: `${i}` });
     const held = reserve(fresh.db, ana, board.id);
-    await lockIsWaitedFor();
+    await holdWaits();
     await heavy("boards").where({ id: board.id }).update({ grade: "FAS" });
     await heavy.commit();
     expect(await held).toMatchObject({ ok: true });
@@ -162,12 +162,14 @@ describe("a deadlock", () => {
     expect(await kindsOf(board.id)).toEqual(["reserved"]);
   });
 
-  /** Waits until some transaction on the server waits for a lock. */
-  async function lockIsWaitedFor(): Promise<void> {
-    for (let i = 0; i < 500; i++) {
-      const [rows] = await fresh.db.raw("SELECT 1 FROM information_schema.innodb_trx WHERE trx_state = 'LOCK WAIT'");
+  /** Waits until the hold waits for a lock. The table shows what was a moment ago, and no news to whom asks again within a tenth of a second. */
+  async function holdWaits(): Promise<void> {
+    for (let i = 0; i < 30; i++) {
+      await sleep(150);
+      const [rows] = await other.raw(
+        "SELECT 1 FROM information_schema.innodb_trx WHERE trx_state = 'LOCK WAIT' AND trx_query LIKE '%into `holds`%'",
+      );
       if (rows.length > 0) return;
-      await sleep(10);
     }
     throw new Error("nobody waits");
   }

@@ -70,6 +70,11 @@ function liveHolds(db: Knex, actor: Pick<Actor, "shopId">): Knex.QueryBuilder {
     );
 }
 
+/** Words of three letters and more that InnoDB leaves out of a full-text index (its default stopword list), so that to ask for one finds nothing. */
+const unindexed = new Set(
+  "about are com for from how that the this was what when where who will with und www".split(" "),
+);
+
 /** Every word must begin some word of the board's text; a bare number is a tag number, and what looks like a tag is one, or its beginning. */
 function searchWords(query: Knex.QueryBuilder, typed: string): void {
   if (/^\d{1,9}$/.test(typed)) {
@@ -82,8 +87,9 @@ function searchWords(query: Knex.QueryBuilder, typed: string): void {
     return;
   }
   const words = typed.match(/[\p{L}\p{N}]+/gu) ?? [];
-  const long = words.filter((word) => word.length >= 3);
-  for (const word of words.filter((word) => word.length < 3)) query.where("b.search_text", "like", `%${word}%`);
+  const isIndexed = (word: string) => word.length >= 3 && !unindexed.has(word.toLowerCase());
+  const long = words.filter(isIndexed);
+  for (const word of words.filter((word) => !isIndexed(word))) query.where("b.search_text", "like", `%${word}%`);
   if (long.length > 0)
     query.whereRaw("MATCH (b.search_text) AGAINST (? IN BOOLEAN MODE)", long.map((word) => `+${word}*`).join(" "));
   if (words.length === 0) query.whereRaw("FALSE");
@@ -98,10 +104,12 @@ const orders: Record<BoardFilter["sort"], { column: string; order: "asc" | "desc
   angle: { column: "b.ring_mean_deg", order: "desc" },
 };
 
-/** The order of a list, ties by identifier in the same direction, so that one index serves both. */
-function inOrder(sort: BoardFilter["sort"]) {
-  const order = orders[sort];
-  return [order, { column: "b.id", order: order.order }];
+/** Puts a list in order, ties by identifier in the same direction, so that one index serves both. */
+function inOrder(query: Knex.QueryBuilder, filter: BoardFilter): Knex.QueryBuilder {
+  const order = orders[filter.sort];
+  // What nobody has metered is not the driest.
+  if (filter.sort === "moisture" && filter.moisture === undefined) query.orderByRaw("b.moisture_pct IS NULL");
+  return query.orderBy([order, { column: "b.id", order: order.order }]);
 }
 
 /** One page of the list, with how many boards match in all. */
@@ -125,14 +133,12 @@ export async function listSummaries(
   slice: { limit: number; offset: number },
 ): Promise<BoardSummary[]> {
   // The slice is found on an index alone; only its rows are then read whole.
-  const ids = filtered(db, actor, filter)
-    .orderBy(inOrder(filter.sort))
+  const ids = inOrder(filtered(db, actor, filter), filter)
     .limit(slice.limit)
     .offset(slice.offset)
     .select("b.id");
-  const rows = await withPlace(db("boards as b").join(ids.as("slice"), "slice.id", "b.id"))
-    .orderBy(inOrder(filter.sort))
-    .select(summaryColumns);
+  const whole = withPlace(db("boards as b").join(ids.as("slice"), "slice.id", "b.id"));
+  const rows = await inOrder(whole, filter).select(summaryColumns);
   return withHolds(db, actor, rows);
 }
 

@@ -11,7 +11,7 @@ test("an empty address asks for the racked boards, newest first", () => {
 });
 
 describe("a value that makes sense is taken", () => {
-  test.each([
+  test.each<[Record<string, string>, object]>([
     [{ q: "  live edge " }, { q: "live edge" }],
     [{ species: "white-oak" }, { species: "white-oak" }],
     [{ quarters: "8" }, { quarters: 8 }],
@@ -19,20 +19,23 @@ describe("a value that makes sense is taken", () => {
     [{ width: "8 1/4" }, { width: "8 1/4", minWidthMm: 209.55 }],
     [{ rings: "rift" }, { rings: "rift" }],
     [{ rings: "unread" }, { rings: "unread" }],
-    ...[...boardStates, "any"].map((state) => [{ state }, { state }] as const),
+    ...[...boardStates, "any"].map((state): [Record<string, string>, object] => [{ state }, { state }]),
     [{ moisture: "8.5" }, { moisture: 8.5 }],
     [{ moisture: "0" }, { moisture: 0 }],
     [{ figure: "bird's eye" }, { figure: "bird's eye" }],
     [{ free: "yes" }, { free: "yes" }],
-    ...["newest", "tag", "length", "width", "moisture", "angle"].map((sort) => [{ sort }, { sort }] as const),
+    ...["newest", "tag", "length", "width", "moisture", "angle"].map((sort): [Record<string, string>, object] => [
+      { sort },
+      { sort },
+    ]),
     [{ page: "3" }, { page: 3 }],
   ])("%o", (given, taken) => {
-    expect(read(given as unknown as Record<string, string>)).toEqual({ ...unfiltered, ...taken });
+    expect(read(given)).toEqual({ ...unfiltered, ...taken });
   });
 });
 
 describe("a value that makes none is as if it were not there", () => {
-  test.each([
+  test.each<Record<string, string>>([
     { q: "x".repeat(10_000) },
     { species: "s".repeat(61) },
     { quarters: "0" },
@@ -65,7 +68,7 @@ describe("a value that makes none is as if it were not there", () => {
     { page: "" },
     { __proto__x: "1", constructor: "1", toString: "1" },
   ])("%o", (given) => {
-    expect(read(given as unknown as Record<string, string>)).toEqual(unfiltered);
+    expect(read(given)).toEqual(unfiltered);
   });
 
   test("a length that cannot be read stays in its box and filters nothing", () => {

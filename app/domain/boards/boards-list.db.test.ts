@@ -107,8 +107,8 @@ describe("filters", () => {
 
   test("somebody else's place, project or delivery shows nothing", async () => {
     const stranger = await anActor(fresh.db);
-    for (const filter of [{ arm }, { project: project.id }, { delivery }])
-      expect((await list(stranger, { ...filter, state: "any" })).total).toBe(0);
+    for (const [name, id] of Object.entries({ arm, project: project.id, delivery }))
+      expect((await list(stranger, { [name]: id, state: "any" })).total).toBe(0);
   });
 
   // The database refuses to compare an identifier with what has signs beyond ASCII.

@@ -21,6 +21,7 @@ export default [
         route("correct/:group", "routes/boards/correct.tsx"),
         route("moisture", "routes/boards/moisture.tsx"),
         route("move", "routes/boards/move.tsx"),
+        route("mark", "routes/boards/mark.tsx"),
         route("defects", "routes/boards/defects.tsx"),
       ]),
       route(":boardId/reserve", "routes/boards/reserve.tsx"),

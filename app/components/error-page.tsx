@@ -1,6 +1,10 @@
 import { isRouteErrorResponse, Link } from "react-router";
 
 const words: Record<number, { title: string; text: string }> = {
+  400: {
+    title: "That did not come through right",
+    text: "What was sent is not what this page sends. Go back, look at it again, and try once more.",
+  },
   401: { title: "Sign in first", text: "This page belongs to a shop. Sign in and it opens where you left it." },
   403: {
     title: "Not yours to do",

@@ -1,4 +1,5 @@
 import { data, href, type RouterContextProvider, redirect } from "react-router";
+import type { z } from "zod";
 import { actorCan } from "#app/domain/shop/actor.ts";
 import type { Permission } from "#app/domain/shop/permissions.ts";
 import { type AtWork, atWorkContext, type Visit, visitContext } from "./context.server.ts";
@@ -29,4 +30,15 @@ export function requireVisit(context: Readonly<RouterContextProvider>, url: URL)
   const visit = context.get(visitContext);
   if (!visit) throw redirect(`${href("/sign-in")}?${new URLSearchParams({ to: url.pathname + url.search })}`);
   return visit;
+}
+
+/**
+ * The fields of a small form that our own pages always fill right: buttons and choices.
+ *
+ * @throws a 400 answer for anything else.
+ */
+export async function requireForm<T>(request: Request, schema: z.ZodType<T>): Promise<T> {
+  const parsed = schema.safeParse(Object.fromEntries(await request.formData()));
+  if (!parsed.success) throw data({ why: "form" }, { status: 400 });
+  return parsed.data;
 }

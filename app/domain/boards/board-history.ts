@@ -19,6 +19,7 @@ const kinds = {
   "taken down": "Taken down",
   "put back": "Put back",
   used: "Used",
+  marked: "Marked",
   deleted: "Deleted",
   "offcut made": "Offcut made",
 } as const;

@@ -84,6 +84,9 @@ export default function BoardPage({ loaderData }: Route.ComponentProps) {
             {can(role, "tag:print") ? (
               <ButtonLink to={`${href("/tags")}?board=${boardId}`}>Print the tag</ButtonLink>
             ) : null}
+            {can(role, "board:correct") ? (
+              <ButtonLink to={href("/boards/:boardId/mark", { boardId }) + toPanel}>Used, sold or lost</ButtonLink>
+            ) : null}
             {can(role, "board:delete") ? (
               <ButtonLink look="danger" to={href("/boards/:boardId/delete", { boardId })}>
                 Delete

@@ -2,7 +2,7 @@ import { data, href, redirect } from "react-router";
 import { z } from "zod";
 import { putBack, takeDown } from "#app/domain/holds/holds.server.ts";
 import { dbContext } from "#app/server/context.server.ts";
-import { notHere, requireRole } from "#app/server/guards.server.ts";
+import { notHere, requireForm, requireRole } from "#app/server/guards.server.ts";
 import { systemClock } from "#app/services/clock.server.ts";
 import type { Route } from "./+types/state.ts";
 
@@ -11,7 +11,7 @@ const form = z.object({ intent: z.enum(["take down", "put back"]) });
 export async function action({ params, request, context }: Route.ActionArgs) {
   const { actor, shop } = requireRole(context, "board:take-down");
   const db = context.get(dbContext);
-  const { intent } = form.parse(Object.fromEntries(await request.formData()));
+  const { intent } = await requireForm(request, form);
   const now = systemClock.now();
   const result =
     intent === "take down"

@@ -4,7 +4,7 @@ import { extendHold, letGo } from "#app/domain/holds/holds.server.ts";
 import { getHold } from "#app/domain/holds/holds.sql.server.ts";
 import { backTo } from "#app/server/back-to.server.ts";
 import { dbContext } from "#app/server/context.server.ts";
-import { notHere, requireFound, requireRole } from "#app/server/guards.server.ts";
+import { notHere, requireForm, requireFound, requireRole } from "#app/server/guards.server.ts";
 import { systemClock } from "#app/services/clock.server.ts";
 import type { Route } from "./+types/hold.ts";
 
@@ -16,7 +16,7 @@ const extraDays = 14;
 export async function action({ params, request, context }: Route.ActionArgs) {
   const { actor } = requireRole(context, "hold:change-own");
   const db = context.get(dbContext);
-  const { intent } = form.parse(Object.fromEntries(await request.formData()));
+  const { intent } = await requireForm(request, form);
   const hold = requireFound(await getHold(db, actor, params.holdId));
   const result =
     intent === "extend"

@@ -53,6 +53,7 @@ export default [
     ...prefix("projects", [
       index("routes/projects/list.tsx"),
       route("new", "routes/projects/new.tsx"),
+      route(":projectId/plan", "routes/projects/plan.tsx"),
       route(":projectId", "routes/projects/project.tsx", [
         route("change", "routes/projects/change.tsx"),
         route("parts", "routes/projects/parts.tsx"),

@@ -4,6 +4,7 @@ import { createContext } from "react-router";
 import type { Actor } from "#app/domain/shop/actor.ts";
 import type { ShopSettings } from "#app/domain/shop/shop.ts";
 import type { Mailer } from "#app/services/mail.server.ts";
+import type { Planner } from "#app/services/planner.server.ts";
 import type { RingReader } from "#app/services/ring-reader.server.ts";
 import type { Storage } from "#app/services/storage.server.ts";
 
@@ -12,6 +13,9 @@ export const dbContext = createContext<Knex>();
 
 /** Where files are kept. */
 export const storageContext = createContext<Storage>();
+
+/** What plans boards to cut, beside this process. */
+export const plannerContext = createContext<Planner>();
 
 /** What reads rings off photos, beside this process. */
 export const ringReaderContext = createContext<RingReader>();

@@ -4,6 +4,7 @@ import { appDb } from "#app/services/db.server.ts";
 import { env } from "#app/services/env.server.ts";
 import { log } from "#app/services/log.server.ts";
 import { appMailer } from "#app/services/mail.server.ts";
+import { appPlanner } from "#app/services/planner.server.ts";
 import { appRingReader } from "#app/services/ring-reader.server.ts";
 import { appStorage } from "#app/services/storage.server.ts";
 import { contentSecurityPolicy } from "./content-security-policy.server.ts";
@@ -12,6 +13,7 @@ import {
   logContext,
   mailerContext,
   nonceContext,
+  plannerContext,
   ringReaderContext,
   storageContext,
 } from "./context.server.ts";
@@ -29,12 +31,13 @@ export const requestLog: MiddlewareFunction<Response> = async ({ request, contex
   return response;
 };
 
-/** Puts the process's database, file store, mailer and ring reader within reach of loaders and actions. Tests set their own before the root runs. */
+/** Puts the process's database, file store, mailer, ring reader and planner within reach of loaders and actions. Tests set their own before the root runs. */
 export const outside: MiddlewareFunction<Response> = ({ context }) => {
   context.set(dbContext, appDb());
   context.set(storageContext, appStorage());
   context.set(mailerContext, appMailer());
   context.set(ringReaderContext, appRingReader());
+  context.set(plannerContext, appPlanner());
 };
 
 /** Headers that every answer carries. Pages are never kept by a cache that others share; files set their own policy. */

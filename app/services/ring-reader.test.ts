@@ -13,7 +13,7 @@ describe("the ring reader in its thread", () => {
     const picture = await endPicture(size, { xMm: -90, yMm: 215 });
     let ticks = 0;
     const clock = setInterval(() => ticks++, 5);
-    const answer = await reader.read({ bytes: picture.jpeg, ...size, limits });
+    const answer = await reader.ask({ bytes: picture.jpeg, ...size, limits });
     clearInterval(clock);
     if (!answer.ok) throw new Error(answer.message);
     // Ring angle at mid-width of circles round that pith: atan(190 / 202) = 43 degrees.
@@ -26,8 +26,8 @@ describe("the ring reader in its thread", () => {
   });
 
   test("what is no picture gets words, and the next question an answer", async () => {
-    expect(await reader.read({ bytes: Buffer.from("no picture"), ...size, limits })).toMatchObject({ ok: false });
+    expect(await reader.ask({ bytes: Buffer.from("no picture"), ...size, limits })).toMatchObject({ ok: false });
     const picture = await endPicture(size, { xMm: 100, yMm: 140 });
-    expect(await reader.read({ bytes: picture.jpeg, ...size, limits })).toMatchObject({ ok: true });
+    expect(await reader.ask({ bytes: picture.jpeg, ...size, limits })).toMatchObject({ ok: true });
   });
 });

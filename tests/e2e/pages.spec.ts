@@ -72,6 +72,7 @@ async function recordPages(page: Page): Promise<string[]> {
       "rings/by-eye",
     ].map((tail) => `${board}/${tail}`),
     `${project}/change`,
+    `${project}/plan`,
     `${project}/parts`,
     `${delivery}/edit`,
     `/tags?board=${board.split("/").at(-1)}`,

@@ -315,3 +315,20 @@ export async function boardCosts(
     .select("b.id", "b.cost_minor");
   return new Map(rows.map((row: { id: string; cost_minor: number }) => [row.id, row.cost_minor]));
 }
+
+/** Racked boards of some species, with what each costs, for planning. In tag order, at most as many as a plan takes. */
+export async function listRackOf(
+  db: Knex,
+  actor: Pick<Actor, "shopId">,
+  species: string[],
+  limit: number,
+): Promise<{ board: BoardSummary; costMinor: number | null }[]> {
+  if (species.length === 0) return [];
+  const rows = await withPlace(boardsOf(db, actor).where("b.state", "racked").whereIn("b.species", species))
+    .orderBy("b.tag_number")
+    .limit(limit)
+    .select({ ...summaryColumns, costMinor: "b.cost_minor" });
+  const costs = rows.map((row: { costMinor: number | null }) => row.costMinor);
+  const boards = await withHolds(db, actor, rows);
+  return boards.map((board, i) => ({ board, costMinor: costs[i] ?? null }));
+}

@@ -6,18 +6,20 @@ import { writeEvent } from "./board-events.server.ts";
 import { lockBoard } from "./boards.sql.server.ts";
 import type { Defect, DefectForm } from "./defect.ts";
 
+const columns = {
+  id: "id",
+  kind: "kind",
+  face: "face",
+  alongMm: "along_mm",
+  acrossMm: "across_mm",
+  lengthMm: "length_mm",
+  widthMm: "width_mm",
+  note: "note",
+} as const;
+
 /** A board's defects, from the near end on. */
 export async function listDefects(db: Knex, actor: Pick<Actor, "shopId">, boardId: string): Promise<Defect[]> {
-  return db("board_defects").where({ shop_id: actor.shopId, board_id: boardId }).orderBy("along_mm").select({
-    id: "id",
-    kind: "kind",
-    face: "face",
-    alongMm: "along_mm",
-    acrossMm: "across_mm",
-    lengthMm: "length_mm",
-    widthMm: "width_mm",
-    note: "note",
-  });
+  return db("board_defects").where({ shop_id: actor.shopId, board_id: boardId }).orderBy("along_mm").select(columns);
 }
 
 /** Notes a defect, with its line of history; false when the board is not in this shop. */
@@ -52,4 +54,20 @@ export async function removeDefect(db: Knex, actor: Actor, boardId: string, defe
     await writeEvent(trx, actor, boardId, "defect removed", { kind: defect.kind, "at (mm)": defect.along_mm });
     return true;
   });
+}
+
+/** Defects of many boards at once, by board. */
+export async function listDefectsOf(
+  db: Knex,
+  actor: Pick<Actor, "shopId">,
+  boardIds: string[],
+): Promise<Map<string, Defect[]>> {
+  const found = new Map<string, Defect[]>();
+  if (boardIds.length === 0) return found;
+  const rows = await db("board_defects")
+    .where({ shop_id: actor.shopId })
+    .whereIn("board_id", boardIds)
+    .select({ boardId: "board_id", ...columns });
+  for (const { boardId, ...defect } of rows) found.set(boardId, [...(found.get(boardId) ?? []), defect]);
+  return found;
 }

@@ -35,5 +35,5 @@ export async function readPhoto(
   const bytes = key && (await services.storage.read(key, mostPhotoBytes * 2));
   if (!bytes) return null;
   const { widthMm, thicknessMm, species } = board;
-  return services.reader.read({ bytes, corners, widthMm, thicknessMm, limits, structure: structureOf(species) });
+  return services.reader.ask({ bytes, corners, widthMm, thicknessMm, limits, structure: structureOf(species) });
 }

@@ -64,7 +64,16 @@ export default function ProjectPage({ loaderData }: Route.ComponentProps) {
         title={project.name}
         over={project.client || "No client named"}
         lead={<ProjectMark name={`${project.crayon} crayon`} crayon={project.crayon} />}
-        actions={mayChange ? <ButtonLink to={href("/projects/:projectId/change", at)}>Change</ButtonLink> : null}
+        actions={
+          mayChange ? (
+            <>
+              <ButtonLink look="main" to={href("/projects/:projectId/plan", at)}>
+                Plan its boards
+              </ButtonLink>
+              <ButtonLink to={href("/projects/:projectId/change", at)}>Change</ButtonLink>
+            </>
+          ) : null
+        }
       />
       <Outlet />
       <div className="grid items-start gap-4 lg:grid-cols-[minmax(0,1fr)_22rem]">

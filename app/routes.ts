@@ -22,6 +22,7 @@ export default [
         route("moisture", "routes/boards/moisture.tsx"),
         route("move", "routes/boards/move.tsx"),
         route("mark", "routes/boards/mark.tsx"),
+        route("offcut", "routes/boards/offcut.tsx"),
         route("defects", "routes/boards/defects.tsx"),
       ]),
       route(":boardId/reserve", "routes/boards/reserve.tsx"),

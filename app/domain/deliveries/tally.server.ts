@@ -1,8 +1,8 @@
 import type { Knex } from "knex";
 import { nominalThicknessMm } from "#app/core/lengths/quarters.ts";
-import { speciesByCode } from "#app/core/species/species.ts";
 import { writeEvents } from "#app/domain/boards/board-events.server.ts";
 import { searchText } from "#app/domain/boards/search-text.ts";
+import { tagFor, takeTagNumbers } from "#app/domain/boards/tag-numbers.server.ts";
 import type { Actor } from "#app/domain/shop/actor.ts";
 import { withTransaction } from "#app/services/db.server.ts";
 import { newId } from "#app/services/ids.server.ts";
@@ -76,18 +76,8 @@ export async function saveTally(
   });
 }
 
-/** The next numbers of the shop's one counter. The counter's row stays locked until the boards are in, so numbers have no gaps and no doubles. */
-async function takeTagNumbers(trx: Knex, actor: Actor, count: number): Promise<number> {
-  const shop = await trx("shops").where({ id: actor.shopId }).forUpdate().first("tag_next");
-  await trx("shops")
-    .where({ id: actor.shopId })
-    .update({ tag_next: shop.tag_next + count });
-  return shop.tag_next;
-}
-
 function boardRow(actor: Actor, delivery: Delivery, line: TallyLine, tagNumber: number, costMinor: number | null) {
-  const prefix = speciesByCode(line.species)?.tagPrefix ?? "B";
-  const tag = `${prefix}-${String(tagNumber).padStart(4, "0")}`;
+  const tag = tagFor(line.species, tagNumber);
   const words = {
     tag,
     species: line.species,

@@ -87,6 +87,9 @@ export default function BoardPage({ loaderData }: Route.ComponentProps) {
             {can(role, "board:correct") ? (
               <ButtonLink to={href("/boards/:boardId/mark", { boardId }) + toPanel}>Used, sold or lost</ButtonLink>
             ) : null}
+            {can(role, "board:correct") && (board.state === "out" || board.state === "used") ? (
+              <ButtonLink to={href("/boards/:boardId/offcut", { boardId }) + toPanel}>An offcut came back</ButtonLink>
+            ) : null}
             {can(role, "board:delete") ? (
               <ButtonLink look="danger" to={href("/boards/:boardId/delete", { boardId })}>
                 Delete

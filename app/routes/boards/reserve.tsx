@@ -17,7 +17,7 @@ import { PartChoice } from "#app/domain/holds/part-choice.tsx";
 import { listOpenProjects } from "#app/domain/projects/projects.sql.server.ts";
 import { useShop } from "#app/domain/shop/shop-view.tsx";
 import { dbContext } from "#app/server/context.server.ts";
-import { requireFound, requireRole } from "#app/server/guards.server.ts";
+import { notHere, requireFound, requireRole } from "#app/server/guards.server.ts";
 import { systemClock } from "#app/services/clock.server.ts";
 import type { Route } from "./+types/reserve.ts";
 
@@ -44,6 +44,7 @@ export async function action({ params, request, context }: Route.ActionArgs) {
   const { projectId, note } = submission.value;
   const stretch = stretchOf(submission.value, board.lengthMm);
   const placed = await placeHold(db, actor, { boardId: board.id, projectId, note, ...stretch, expiresAt: end.at }, now);
+  if (!placed.ok && placed.why === "missing") notHere();
   if (!placed.ok) return data({ result: submission.reply(), refusal: placed }, { status: 409 });
   return redirect(href("/boards/:boardId", { boardId: board.id }));
 }

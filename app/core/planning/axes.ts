@@ -54,17 +54,24 @@ export interface Grid {
   y: number;
 }
 
-const FINE = { x: 2400, y: 700 };
-const COARSE = { x: 1000, y: 320 };
+/** How many steps tables may have along and across: few for the many tables of planning, many for a bound worth claiming. */
+export interface GridSize {
+  x: number;
+  y: number;
+}
 
-/** Steps on which every size lies, where these are few enough; else even ones. */
-export function makeGrid(task: Task): Grid {
-  const step = (size: keyof Pose, most: number, coarse: number) => {
+export const PLAN_GRID: GridSize = { x: 400, y: 160 };
+export const VALUE_GRID: GridSize = { x: 900, y: 250 };
+export const BOUND_GRID: GridSize = { x: 6000, y: 1500 };
+
+/** Steps on which every size lies, where up to three times so many suffice; else even ones. */
+export function makeGrid(task: Task, most: GridSize): Grid {
+  const step = (size: keyof Pose, count: number) => {
     const sizes = task.stocks.map((stock) => stock[size] + task.kerf);
     for (const { poses } of task.kinds) for (const pose of poses) sizes.push(pose[size] + task.kerf);
     const longest = Math.max(...task.stocks.map((stock) => stock[size] + task.kerf));
     const common = sizes.reduce(greatestDivisor, 0);
-    return longest / common <= most ? common : longest / coarse;
+    return longest / common <= 3 * count ? common : longest / count;
   };
-  return { x: step("length", FINE.x, COARSE.x), y: step("width", FINE.y, COARSE.y) };
+  return { x: step("length", most.x), y: step("width", most.y) };
 }

@@ -74,44 +74,66 @@ export class Carver {
       ({ kind, band, cell }) => left[kind]! > 0 && values[kind]! > 0 && band <= across && cell <= along,
     );
     const plain = isPlain(task, stock);
+    const wanted = { values, limits: left };
     const bands: Band[] = [];
     for (let at = 0; ; ) {
       const entries = all.filter(({ kind, band }) => left[kind]! > 0 && at + band <= across);
       if (entries.length === 0) break;
-      const wanted = { values, limits: left };
-      const band = plain
-        ? this.nextPlainBand(stock, way, at, entries, wanted, stages)
+      const made = plain
+        ? this.nextPlainBands(stock, way, at, entries, wanted, stages)
         : this.nextPlacedBand(stock, way, at, entries, wanted);
-      if (!band) break;
-      bands.push(band);
-      for (const [kind, count] of countPieces([band])) left[kind]! -= count;
-      at = band.at + band.size + task.kerf;
+      if (made.length === 0) break;
+      bands.push(...made);
+      const last = made.at(-1)!;
+      at = last.at + last.size + task.kerf;
     }
     return bands;
   }
 
-  private nextPlainBand(stock: Stock, way: Way, at: number, entries: Entry[], wanted: Wanted, stages: 2 | 3) {
+  /**
+   * Plans all bands of the room that is left, and makes them as long as they turn out nearly as good as planned: pieces are
+   * then fewer, and what is best has to be planned anew.
+   */
+  private nextPlainBands(
+    stock: Stock,
+    way: Way,
+    from: number,
+    entries: Entry[],
+    wanted: Wanted,
+    stages: 2 | 3,
+  ): Band[] {
     const { task, grid } = this;
     const { across, along } = room(task, stock, way);
-    const acrossLeft = { longest: across - at, step: grid[way] };
+    const acrossStep = grid[way];
     const alongStep = { longest: along, step: grid[otherWay(way)] };
+    const acrossLeft = { longest: across - from, step: acrossStep };
     const table =
       stages === 2
         ? twoStageBands(entries, wanted.values, wanted.limits, alongStep)
         : this.stackedTable(stock, way, wanted, acrossLeft, alongStep);
-    const size = bestFirstBand(table, along, acrossLeft);
-    if (size === null) return null;
-    const within = entries.filter(({ band }) => band <= size + acrossLeft.step * (stages - 2));
-    return stages === 2
-      ? fillPlainBand(task, stock, way, at, within, wanted, alongStep.step)
-      : fillStackedBand(
-          task,
-          way,
-          { at, across: Math.min(across - at, size + acrossLeft.step * 0.999), along },
-          within,
-          wanted,
-          grid,
-        );
+    const bands: Band[] = [];
+    let at = from;
+    for (const { size, value } of plannedBands(table, along, acrossLeft)) {
+      if (at + size > across) continue;
+      const slack = stages === 2 ? 0 : acrossStep * 0.999;
+      const within = entries.filter(({ kind, band }) => band <= size + slack && wanted.limits[kind]! > 0);
+      const band =
+        stages === 2
+          ? fillPlainBand(task, stock, way, at, within, wanted, alongStep.step / FILL_STEPS)
+          : fillStackedBand(
+              task,
+              way,
+              { at, across: Math.min(across - at, size + slack), along },
+              within,
+              wanted,
+              grid,
+            );
+      if (!band || (bands.length > 0 && band.value < NEARLY * value)) break;
+      bands.push(band);
+      for (const [kind, count] of countPieces([band])) wanted.limits[kind]! -= count;
+      at = band.at + band.size + task.kerf;
+    }
+    return bands;
   }
 
   private stackedTable(
@@ -126,7 +148,7 @@ export class Carver {
   }
 
   /** Where places differ: the band that is worth most together with all that could follow it, were places alike. */
-  private nextPlacedBand(stock: Stock, way: Way, at: number, entries: Entry[], wanted: Wanted): Band | null {
+  private nextPlacedBand(stock: Stock, way: Way, at: number, entries: Entry[], wanted: Wanted): Band[] {
     const { task, grid } = this;
     const { across, along } = room(task, stock, way);
     const acrossLeft = { longest: across - at, step: grid[way] };
@@ -163,9 +185,16 @@ export class Carver {
         }
       }
     }
-    return best;
+    if (!best) return [];
+    for (const [kind, count] of countPieces([best])) wanted.limits[kind]! -= count;
+    return [best];
   }
 }
+
+/** A band worth less than this part of what was planned calls for a new plan. */
+const NEARLY = 0.97;
+/** Lines are filled by finer steps than planned by. */
+const FILL_STEPS = 2;
 
 interface Wanted {
   values: ArrayLike<number>;
@@ -181,22 +210,17 @@ export function isPlain(task: Task, stock: Stock): boolean {
   return stock.defects.length === 0 && !task.kinds.some((kind) => kind.window && stock.eligible[kind.index]);
 }
 
-/** Of the bands worth most together, the one worth most for its size; null when none fits. */
-function bestFirstBand(table: BandTable, along: number, across: { longest: number; step: number }): number | null {
+/** The bands worth most together, the one worth most for its size first. */
+function plannedBands(table: BandTable, along: number, across: { longest: number; step: number }) {
   const { first } = compose(table, along, across);
-  let best: number | null = null;
-  let most = 0;
+  const bands: { size: number; value: number }[] = [];
   for (let at = first.length - 1; at > 0 && first[at]! >= 0; ) {
     const band = first[at]!;
     const size = table.bands[band]!;
-    const worth = table.valueAt(band, along) / size;
-    if (size <= across.longest && worth > most) {
-      most = worth;
-      best = size;
-    }
+    bands.push({ size, value: table.valueAt(band, along) });
     at -= Math.max(1, Math.floor(size / across.step + 1e-9));
   }
-  return best;
+  return bands.sort((a, b) => b.value / b.size - a.value / a.size || b.size - a.size);
 }
 
 /** Places where the next band may begin: here, and where a window opens or a defect ends further on. */

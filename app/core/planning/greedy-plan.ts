@@ -25,21 +25,21 @@ export interface GreedyTools {
  * Opens one board after another, always one that gives most worth for its cost, until nothing is left or nothing fits.
  *
  * @param trials boards really carved at each step, the most promising first.
- * @param keepOn told the cost so far; false gives up, with null.
+ * @param keepOn told the cost so far and the pieces left; false gives up, with null.
  */
 export function greedyPlan(
   { task, carver, pricer, stocks }: GreedyTools,
   values: ArrayLike<number>,
   from: Remaining,
   trials: number,
-  keepOn: (cost: number) => boolean,
+  keepOn: (cost: number, demand: number[]) => boolean,
 ): Solution | null {
   const demand = from.demand.slice();
   const boards = from.boards.slice();
   const patterns: Pattern[] = [];
   let cost = 0;
   while (demand.some((count) => count > 0)) {
-    if (!keepOn(cost)) return null;
+    if (!keepOn(cost, demand)) return null;
     const pattern = bestForCost({ task, carver, pricer, stocks }, values, demand, boards, trials);
     if (!pattern) break;
     patterns.push(pattern);
@@ -50,7 +50,8 @@ export function greedyPlan(
   return { patterns, missing: demand };
 }
 
-function bestForCost(
+/** The pattern that gives most worth for its cost, of the boards that promise most. */
+export function bestForCost(
   { task, carver, pricer, stocks }: GreedyTools,
   values: ArrayLike<number>,
   demand: number[],

@@ -1,9 +1,9 @@
-import { makeGrid } from "./axes.ts";
-import { BoardProgram } from "./board-program.ts";
+import { BOUND_GRID, type Grid, makeGrid, PLAN_GRID, VALUE_GRID } from "./axes.ts";
 import { Carver } from "./carve.ts";
 import { areaBound, nextPossibleCost } from "./cost-bound.ts";
 import { everything, type GreedyTools, greedyPlan } from "./greedy-plan.ts";
 import { improvePlan } from "./improve-plan.ts";
+import { PieceValues } from "./piece-values.ts";
 import { BoardPricer, boundByPrices } from "./price-boards.ts";
 import { costOf, isBetter, type Solution } from "./solution.ts";
 import type { Stock, Task } from "./task.ts";
@@ -13,15 +13,21 @@ export interface SearchWatch {
   onProgress: (progress: { cost: number; bound: number }) => void;
 }
 
-/** Stocks that the pattern program and the greedy plans choose from; the bound always looks at all. */
-const MOST_CANDIDATES = 120;
+/** Stocks that values and plans are made from: the most promising of all, and of each class of cost. Bounds look at all. */
+const CANDIDATES = { best: 110, classes: 12, ofEachClass: 6 };
+const ROUNDS = 24;
+const PATTERNS_A_ROUND = 100;
+const TRIALS = 8;
+const PATIENCE = 400;
 
 /**
  * Plans any rack: values of pieces from the pattern program, greedy plans by these values, and then repeated replanning of a
  * few boards at a time.
  */
 export function planBoards(task: Task, start: Solution, watch: SearchWatch): { solution: Solution; bound: number } {
-  const search = new BoardSearch(task, start, watch);
+  // What two stages give, three give as well, and it is found sooner.
+  const from = task.stages === 3 ? planBoards({ ...task, stages: 2 }, start, watch).solution : start;
+  const search = new BoardSearch(task, from, watch);
   search.run();
   return { solution: search.best, bound: search.bound };
 }
@@ -29,78 +35,88 @@ export function planBoards(task: Task, start: Solution, watch: SearchWatch): { s
 class BoardSearch {
   best: Solution;
   bound = 0;
+  private readonly grid: Grid;
   private readonly carver: Carver;
-  private readonly pricer: BoardPricer;
-  private readonly startValues: number[];
+  private readonly boundPricer: BoardPricer;
+  private readonly demand: number[];
 
   constructor(
     private readonly task: Task,
     start: Solution,
     private readonly watch: SearchWatch,
   ) {
-    const grid = makeGrid(task);
+    this.grid = makeGrid(task, PLAN_GRID);
     this.best = start;
-    this.carver = new Carver(task, grid);
-    this.pricer = new BoardPricer(task, grid, this.carver);
-    const area = areaBound(task);
-    const { kerf } = task;
-    const gross = task.kinds.map(({ poses }) => (poses[0]!.length + kerf) * (poses[0]!.width + kerf));
-    const needed = task.kinds.reduce((sum, kind) => sum + kind.demand * gross[kind.index]!, 0);
-    this.startValues = gross.map((size) => (size * Math.max(area, 1e-9)) / needed);
-    this.raise(area);
+    this.carver = new Carver(task, this.grid);
+    this.boundPricer = new BoardPricer(task, makeGrid(task, BOUND_GRID), this.carver);
+    this.demand = task.kinds.map((kind) => kind.demand);
   }
 
   run(): void {
-    const { task, watch, startValues } = this;
-    const demand = task.kinds.map((kind) => kind.demand);
-    const prices = this.pricer.price(startValues, demand);
-    this.raise(boundByPrices(task, startValues, prices));
-    const candidates = this.chooseCandidates(
-      (stock) => prices.most[stock.index]! / Math.max(1e-9, prices.cost[stock.index]!),
-    );
-    const grid = makeGrid(task);
+    const { task, watch, grid, carver } = this;
+    const area = areaBound(task);
+    this.raise(area);
+    const start = valuesByArea(task, area);
+    const { most, cost } = new BoardPricer(task, grid, carver).price(start, this.demand);
+    const candidates = this.chooseCandidates((stock) => most[stock.index]! / Math.max(1e-9, cost[stock.index]!));
     const tools: GreedyTools = {
       task,
-      carver: this.carver,
-      pricer:
-        candidates.length < task.stocks.length ? new BoardPricer(task, grid, this.carver, candidates) : this.pricer,
+      carver,
+      pricer: new BoardPricer(task, grid, carver, candidates),
       stocks: candidates,
     };
-    const program = new BoardProgram(task, candidates, startValues);
-    for (const { patterns } of [this.best]) for (const pattern of patterns) program.add(pattern);
-    this.tryGreedy(tools, startValues, program);
-    for (let round = 0; round < ROUNDS && !this.done() && watch.mayGoOn(); round++) {
-      const found = program.round(this.carver, this.pricer, PATTERNS_A_ROUND, watch.mayGoOn);
-      this.raise(program.bound);
-      if (round % 4 === 3 || !found) this.tryGreedy(tools, program.values, program);
-      if (!found) break;
-    }
+    this.tryGreedy(tools, start);
+    this.raiseBy(start);
+    let values = start;
+    if (!this.done() && watch.mayGoOn()) values = this.findValues(candidates, start, tools);
     if (this.done() || !watch.mayGoOn()) return;
-    this.best = improvePlan(tools, this.best, program.values, {
+    this.best = improvePlan({ task, carver, grid, stocks: candidates }, this.best, values, {
       mayGoOn: watch.mayGoOn,
       goal: this.bound,
-      patience: 150,
-      most: 2000,
+      patience: PATIENCE,
       onBetter: (solution) => this.report(solution),
     });
   }
 
-  private tryGreedy(tools: GreedyTools, values: number[], program: BoardProgram): void {
-    const found = greedyPlan(tools, values, everything(this.task), 5, this.watch.mayGoOn);
-    if (!found) return;
-    for (const pattern of found.patterns) program.add(pattern);
-    if (!isBetter(this.task, found, this.best)) return;
+  private findValues(candidates: Stock[], start: number[], tools: GreedyTools): number[] {
+    const { task, watch, carver } = this;
+    const pieceValues = new PieceValues(task, makeGrid(task, VALUE_GRID), carver, candidates, start, everything(task));
+    for (let round = 0; round < ROUNDS && watch.mayGoOn(); round++)
+      if (!pieceValues.round(round === 0, PATTERNS_A_ROUND, watch.mayGoOn)) break;
+    const { values } = pieceValues;
+    for (const part of [1, 0.5, 0.25]) {
+      if (this.done() || !watch.mayGoOn()) return start;
+      const blend = values.map((value, kind) => part * value + (1 - part) * start[kind]!);
+      this.raiseBy(blend);
+      this.tryGreedy(tools, blend);
+    }
+    return values;
+  }
+
+  private tryGreedy(tools: GreedyTools, values: number[]): void {
+    const found = greedyPlan(tools, values, everything(this.task), TRIALS, this.watch.mayGoOn);
+    if (!found || !isBetter(this.task, found, this.best)) return;
     this.best = found;
     this.report(found);
   }
 
   private chooseCandidates(promise: (stock: Stock) => number): Stock[] {
     const { stocks } = this.task;
-    if (stocks.length <= MOST_CANDIDATES) return stocks;
-    const inBest = new Set(this.best.patterns.map((pattern) => pattern.stock));
-    return [...stocks]
-      .sort((a, b) => promise(b) - promise(a) || a.index - b.index)
-      .filter((stock, rank) => rank < MOST_CANDIDATES || inBest.has(stock.index));
+    const { best, classes, ofEachClass } = CANDIDATES;
+    if (stocks.length <= best + classes * ofEachClass) return stocks;
+    const ranked = [...stocks].sort((a, b) => promise(b) - promise(a) || a.index - b.index);
+    const chosen = new Set(ranked.slice(0, best));
+    for (const { stock } of this.best.patterns) chosen.add(stocks[stock]!);
+    const byCost = [...stocks].sort((a, b) => a.cost - b.cost || a.index - b.index);
+    const classOf = new Map(byCost.map((stock, rank) => [stock, Math.floor((rank * classes) / byCost.length)]));
+    for (let costClass = 0; costClass < classes; costClass++)
+      for (const stock of ranked.filter((stock) => classOf.get(stock) === costClass).slice(0, ofEachClass))
+        chosen.add(stock);
+    return [...chosen].sort((a, b) => a.index - b.index);
+  }
+
+  private raiseBy(values: number[]): void {
+    this.raise(boundByPrices(this.task, values, this.boundPricer.price(values, this.demand)));
   }
 
   private raise(bound: number): void {
@@ -117,5 +133,10 @@ class BoardSearch {
   }
 }
 
-const ROUNDS = 60;
-const PATTERNS_A_ROUND = 25;
+/** Every piece worth its area and kerf, all together worth so much. */
+function valuesByArea(task: Task, worth: number): number[] {
+  const { kerf } = task;
+  const gross = task.kinds.map(({ poses }) => (poses[0]!.length + kerf) * (poses[0]!.width + kerf));
+  const needed = task.kinds.reduce((sum, kind) => sum + kind.demand * gross[kind.index]!, 0);
+  return gross.map((size) => (size * Math.max(worth, 1e-9)) / needed);
+}

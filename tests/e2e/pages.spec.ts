@@ -73,6 +73,7 @@ async function recordPages(page: Page): Promise<string[]> {
     ].map((tail) => `${board}/${tail}`),
     `${project}/change`,
     `${project}/plan`,
+    `${project}/take-down`,
     `${project}/parts`,
     `${delivery}/edit`,
     `/tags?board=${board.split("/").at(-1)}`,

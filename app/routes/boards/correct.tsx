@@ -15,7 +15,7 @@ import { getBoard } from "#app/domain/boards/boards.sql.server.ts";
 import { CorrectionFields, correctionDefaults } from "#app/domain/boards/correction-fields.tsx";
 import { useShop } from "#app/domain/shop/shop-view.tsx";
 import { dbContext } from "#app/server/context.server.ts";
-import { notHere, requireFound, requireRole } from "#app/server/guards.server.ts";
+import { formVersion, notHere, requireFound, requireRole } from "#app/server/guards.server.ts";
 import type { Route } from "./+types/correct.ts";
 
 export { revalidateOnConflict as shouldRevalidate } from "#app/components/revalidate-on-conflict.ts";
@@ -45,7 +45,7 @@ export async function action({ params, request, context }: Route.ActionArgs) {
   const formData = await request.formData();
   const submission = parseWithZod(formData, { schema: correctionSchema(group, shop) });
   if (submission.status !== "success") return data({ result: submission.reply(), stale: null }, { status: 400 });
-  const version = Number(formData.get("version"));
+  const version = formVersion(formData);
   const result = await correctBoard(context.get(dbContext), actor, params.boardId, version, submission.value);
   if (!result.ok && result.why === "missing") notHere();
   if (!result.ok)

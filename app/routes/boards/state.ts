@@ -1,6 +1,7 @@
 import { data, href, redirect } from "react-router";
 import { z } from "zod";
 import { putBack, takeDown } from "#app/domain/holds/holds.server.ts";
+import { backTo } from "#app/server/back-to.server.ts";
 import { dbContext } from "#app/server/context.server.ts";
 import { notHere, requireForm, requireRole } from "#app/server/guards.server.ts";
 import { systemClock } from "#app/services/clock.server.ts";
@@ -19,5 +20,5 @@ export async function action({ params, request, context }: Route.ActionArgs) {
       : await putBack(db, actor, params.boardId, shop.holdDays, now);
   if (!result.ok && result.why === "missing") notHere();
   if (!result.ok) throw data({ why: result.why, state: result.state }, { status: 409 });
-  return redirect(href("/boards/:boardId", { boardId: params.boardId }));
+  return redirect(backTo(request, href("/boards/:boardId", { boardId: params.boardId })));
 }

@@ -1,6 +1,7 @@
 import fc from "fast-check";
 import { RouterContextProvider } from "react-router";
 import { describe, expect, test } from "vitest";
+import { calculators } from "#app/domain/calculators/calculators.ts";
 import { aShopLike } from "#app/domain/calculators/shop.fixture.ts";
 import { atWorkContext } from "#app/server/context.server.ts";
 import { loader as air } from "./air.tsx";
@@ -31,6 +32,11 @@ function load(loader: unknown, units: "in" | "mm", given: Record<string, string>
   const url = new URL(`http://shop.example/?${new URLSearchParams(given)}`);
   return (loader as (args: unknown) => Loaded)({ context, url, params: {}, request: new Request(url) });
 }
+
+test("every calculator in the list has its page", () => {
+  const paths = Object.values(calculators).map(({ path }) => path.replace("/calculators/", ""));
+  expect(paths.toSorted()).toEqual(Object.keys(loaders).toSorted());
+});
 
 const names = Object.keys(loaders) as (keyof typeof loaders)[];
 

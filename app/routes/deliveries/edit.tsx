@@ -12,7 +12,7 @@ import { DeliveryFields, deliveryDefaults } from "#app/domain/deliveries/deliver
 import { listSuppliers } from "#app/domain/deliveries/suppliers.sql.server.ts";
 import { useShop } from "#app/domain/shop/shop-view.tsx";
 import { dbContext } from "#app/server/context.server.ts";
-import { notHere, requireFound, requireRole } from "#app/server/guards.server.ts";
+import { formVersion, notHere, requireFound, requireRole } from "#app/server/guards.server.ts";
 import { systemClock } from "#app/services/clock.server.ts";
 import type { Route } from "./+types/edit.ts";
 
@@ -31,7 +31,7 @@ export async function action({ params, request, context }: Route.ActionArgs) {
   const formData = await request.formData();
   const submission = parseWithZod(formData, { schema: deliveryForm(shop) });
   if (submission.status !== "success") return data({ result: submission.reply(), stale: null }, { status: 400 });
-  const version = Number(formData.get("version"));
+  const version = formVersion(formData);
   const changed = await changeDelivery(db, actor, params.deliveryId, version, submission.value, systemClock.now());
   if (changed.ok) return redirect(href("/deliveries/:deliveryId", { deliveryId: params.deliveryId }));
   if (changed.why === "missing") notHere();

@@ -9,7 +9,7 @@ import { ProjectFields } from "#app/domain/projects/project-fields.tsx";
 import { changeProject } from "#app/domain/projects/projects.server.ts";
 import { getProject } from "#app/domain/projects/projects.sql.server.ts";
 import { dbContext } from "#app/server/context.server.ts";
-import { requireFound, requireRole } from "#app/server/guards.server.ts";
+import { formVersion, requireFound, requireRole } from "#app/server/guards.server.ts";
 import type { Route } from "./+types/change.ts";
 
 export { revalidateOnConflict as shouldRevalidate } from "#app/components/revalidate-on-conflict.ts";
@@ -26,7 +26,7 @@ export async function action({ params, request, context }: Route.ActionArgs) {
   const formData = await request.formData();
   const submission = parseWithZod(formData, { schema: projectForm });
   if (submission.status !== "success") return data({ result: submission.reply(), stale: false }, { status: 400 });
-  const saved = await changeProject(db, actor, params.projectId, Number(formData.get("version")), submission.value);
+  const saved = await changeProject(db, actor, params.projectId, formVersion(formData), submission.value);
   if (saved.ok) return redirect(href("/projects/:projectId", { projectId: params.projectId }));
   const fieldErrors = saved.why === "name taken" ? { name: ["The shop has a project of that name."] } : undefined;
   return data({ result: submission.reply({ fieldErrors }), stale: saved.why === "changed" }, { status: 409 });

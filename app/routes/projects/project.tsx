@@ -1,4 +1,4 @@
-import { href, Outlet } from "react-router";
+import { href, Link, Outlet } from "react-router";
 import { ButtonLink } from "#app/components/button.tsx";
 import { Card, PageHead } from "#app/components/card.tsx";
 import { ProjectMark } from "#app/components/crayon.tsx";
@@ -79,7 +79,19 @@ export default function ProjectPage({ loaderData }: Route.ComponentProps) {
       <div className="grid items-start gap-4 lg:grid-cols-[minmax(0,1fr)_22rem]">
         <div className="grid gap-4">
           <PartsTable parts={parts} projectId={project.id} mayChange={mayChange} />
-          <Card title="Boards reserved" aside={boards.length > 0 ? boards.length : null}>
+          <Card
+            title="Boards reserved"
+            aside={
+              boards.length > 0 ? (
+                <Link
+                  to={href("/projects/:projectId/take-down", at)}
+                  className="inline-flex min-h-11 items-center text-link underline-offset-4 hover:underline"
+                >
+                  Take them down
+                </Link>
+              ) : null
+            }
+          >
             {boards.length > 0 ? (
               <BoardList boards={boards} />
             ) : (

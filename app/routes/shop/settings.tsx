@@ -8,7 +8,7 @@ import { shopForm } from "#app/domain/shop/shop.schema.ts";
 import { ShopFields, shopDefaults } from "#app/domain/shop/shop-fields.tsx";
 import { changeShop } from "#app/domain/shop/shops.server.ts";
 import { dbContext } from "#app/server/context.server.ts";
-import { requireRole } from "#app/server/guards.server.ts";
+import { formVersion, requireRole } from "#app/server/guards.server.ts";
 import type { Route } from "./+types/settings.ts";
 
 export { revalidateOnConflict as shouldRevalidate } from "#app/components/revalidate-on-conflict.ts";
@@ -23,7 +23,7 @@ export async function action({ request, context }: Route.ActionArgs) {
   const formData = await request.formData();
   const submission = parseWithZod(formData, { schema: shopForm(shop.units) });
   if (submission.status !== "success") return data({ result: submission.reply(), stale: false }, { status: 400 });
-  const kept = await changeShop(context.get(dbContext), actor, Number(formData.get("version")), submission.value);
+  const kept = await changeShop(context.get(dbContext), actor, formVersion(formData), submission.value);
   if (!kept) return data({ result: submission.reply(), stale: true }, { status: 409 });
   return redirect(`${href("/settings")}?saved`);
 }

@@ -9,7 +9,7 @@ import { SupplierFields } from "#app/domain/deliveries/supplier-form.tsx";
 import { changeSupplier } from "#app/domain/deliveries/suppliers.server.ts";
 import { getSupplier } from "#app/domain/deliveries/suppliers.sql.server.ts";
 import { dbContext } from "#app/server/context.server.ts";
-import { notHere, requireFound, requireRole } from "#app/server/guards.server.ts";
+import { formVersion, notHere, requireFound, requireRole } from "#app/server/guards.server.ts";
 import { systemClock } from "#app/services/clock.server.ts";
 import type { Route } from "./+types/supplier.ts";
 
@@ -25,7 +25,7 @@ export async function action({ params, request, context }: Route.ActionArgs) {
   const formData = await request.formData();
   const submission = parseWithZod(formData, { schema: supplierForm });
   if (submission.status !== "success") return data({ result: submission.reply(), stale: null }, { status: 400 });
-  const version = Number(formData.get("version"));
+  const version = formVersion(formData);
   const saved = await changeSupplier(db, actor, params.supplierId, version, submission.value, systemClock.now());
   if (saved.ok) return redirect(href("/suppliers"));
   if (saved.why === "missing") notHere();

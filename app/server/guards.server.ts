@@ -42,3 +42,9 @@ export async function requireForm<T>(request: Request, schema: z.ZodType<T>): Pr
   if (!parsed.success) throw data({ why: "form" }, { status: 400 });
   return parsed.data;
 }
+
+/** The version of the record that a form was made from. What is no number fits no record, so that the save is refused as overtaken. */
+export function formVersion(formData: FormData): number {
+  const version = Number(formData.get("version"));
+  return Number.isSafeInteger(version) ? version : 0;
+}

@@ -51,6 +51,9 @@ export type MarksRead =
 /** A pith put in its place by hand is good to some degrees: our own estimate. */
 const movedPithConfidence = 0.7;
 
+/** No tree has rings so wide: a kilometre. */
+const farthestPithMm = 1_000_000;
+
 /** Reads strokes, or a pith that was moved; null when there is neither, and the reader's own word stands. */
 export function readMarks(marks: RingMarks, board: EndSize, ringsPerInch: number | null = null): MarksRead | null {
   const corners = marks.corners as unknown as EndCorners;
@@ -63,7 +66,11 @@ export function readMarks(marks: RingMarks, board: EndSize, ringsPerInch: number
   if (!marks.pith) return null;
   const plane = endPlane(corners, board);
   if (!plane.ok) return plane;
-  const field = fieldFromPith(board, plane.plane.toMm(marks.pith), ringsPerInch);
+  const pith = plane.plane.toMm(marks.pith);
+  // Beyond the horizon of a photo taken askew there is no place on the end at all.
+  if (!(Math.hypot(pith.xMm, pith.yMm) <= farthestPithMm))
+    return { ok: false, why: "The pith lies too far off. Drag it nearer, or draw along the rings." };
+  const field = fieldFromPith(board, pith, ringsPerInch);
   return { ok: true, field, confidence: movedPithConfidence, doubts: [], from: "pith" };
 }
 

@@ -167,7 +167,7 @@ export class Carver {
         .slice(0, PLACED_TRIALS);
       for (const { size, promise } of promising) {
         if (promise <= most) break;
-        const within = able.filter(({ band }) => band <= size);
+        const within = worthiest(able, size, wanted.values);
         const band = fillPlacedBand(
           task,
           stock,
@@ -201,9 +201,10 @@ interface Wanted {
   limits: number[];
 }
 
-const PLACED_TRIALS = 3;
-const PLACED_STEPS = 300;
-const PLACES = 12;
+const PLACED_TRIALS = 2;
+const PLACED_STEPS = 160;
+const PLACED_ENTRIES = 50;
+const PLACES = 6;
 
 /** Whether every place on a board is as good as any other for all that it may give. */
 export function isPlain(task: Task, stock: Stock): boolean {
@@ -221,6 +222,14 @@ function plannedBands(table: BandTable, along: number, across: { longest: number
     at -= Math.max(1, Math.floor(size / across.step + 1e-9));
   }
   return bands.sort((a, b) => b.value / b.size - a.value / a.size || b.size - a.size);
+}
+
+/** The entries that fit a band and are worth most for the room they take in it. */
+function worthiest(entries: Entry[], size: number, values: ArrayLike<number>): Entry[] {
+  const fitting = entries.filter(({ band }) => band <= size);
+  if (fitting.length <= PLACED_ENTRIES) return fitting;
+  const worth = ({ kind, cell }: Entry) => values[kind]! / cell;
+  return fitting.sort((a, b) => worth(b) - worth(a) || a.kind - b.kind).slice(0, PLACED_ENTRIES);
 }
 
 /** Places where the next band may begin: here, and where a window opens or a defect ends further on. */

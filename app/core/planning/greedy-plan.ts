@@ -40,7 +40,9 @@ export function greedyPlan(
   let cost = 0;
   while (demand.some((count) => count > 0)) {
     if (!keepOn(cost, demand)) return null;
-    const pattern = bestForCost({ task, carver, pricer, stocks }, values, demand, boards, trials);
+    const pattern = bestForCost({ task, carver, pricer, stocks }, values, demand, boards, trials, () =>
+      keepOn(cost, demand),
+    );
     if (!pattern) break;
     patterns.push(pattern);
     cost += pattern.cost;
@@ -51,14 +53,17 @@ export function greedyPlan(
 }
 
 /** The pattern that gives most worth for its cost, of the boards that promise most. */
-export function bestForCost(
+function bestForCost(
   { task, carver, pricer, stocks }: GreedyTools,
   values: ArrayLike<number>,
   demand: number[],
   boards: number[],
   trials: number,
+  mayGoOn: () => boolean,
 ): Pattern | null {
-  const { most, cost } = pricer.price(values, demand);
+  const prices = pricer.price(values, demand, mayGoOn);
+  if (!prices) return null;
+  const { most, cost } = prices;
   const total = demand.reduce((sum, count, kind) => sum + count * values[kind]!, 0);
   const ratio = (worth: number, price: number) => worth / Math.max(price, 1e-9);
   const promise = (stock: Stock) => ratio(Math.min(most[stock.index]!, total), Math.max(cost[stock.index]!, 1e-9));
@@ -69,7 +74,7 @@ export function bestForCost(
   let bestRatio = 0;
   let tried = 0;
   for (const stock of promising) {
-    if (promise(stock) <= bestRatio || (tried >= trials && best)) break;
+    if (promise(stock) <= bestRatio || (tried >= trials && best) || !mayGoOn()) break;
     tried++;
     const pattern = carver.carve(stock, values, demand);
     if (!pattern) continue;

@@ -48,7 +48,7 @@ class BoardSearch {
     this.grid = makeGrid(task, PLAN_GRID);
     this.best = start;
     this.carver = new Carver(task, this.grid);
-    this.boundPricer = new BoardPricer(task, makeGrid(task, BOUND_GRID), this.carver);
+    this.boundPricer = new BoardPricer(task, makeGrid(task, task.stages === 3 ? PLAN_GRID : BOUND_GRID), this.carver);
     this.demand = task.kinds.map((kind) => kind.demand);
   }
 
@@ -57,7 +57,9 @@ class BoardSearch {
     const area = areaBound(task);
     this.raise(area);
     const start = valuesByArea(task, area);
-    const { most, cost } = new BoardPricer(task, grid, carver).price(start, this.demand);
+    const prices = new BoardPricer(task, grid, carver).price(start, this.demand, watch.mayGoOn);
+    if (!prices) return;
+    const { most, cost } = prices;
     const candidates = this.chooseCandidates((stock) => most[stock.index]! / Math.max(1e-9, cost[stock.index]!));
     const tools: GreedyTools = {
       task,
@@ -116,7 +118,8 @@ class BoardSearch {
   }
 
   private raiseBy(values: number[]): void {
-    this.raise(boundByPrices(this.task, values, this.boundPricer.price(values, this.demand)));
+    const prices = this.boundPricer.price(values, this.demand, this.watch.mayGoOn);
+    if (prices) this.raise(boundByPrices(this.task, values, prices));
   }
 
   private raise(bound: number): void {

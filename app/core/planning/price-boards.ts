@@ -53,25 +53,35 @@ export class BoardPricer {
     this.groups = [...groups.values()];
   }
 
-  price(values: ArrayLike<number>, limits: ArrayLike<number>): Prices {
+  /** @returns null when work ran out before all boards were looked at. */
+  price(values: ArrayLike<number>, limits: ArrayLike<number>, mayGoOn: () => boolean = () => true): Prices | null {
     const { kinds, stocks } = this.task;
     const prices: Prices = { most: new Float64Array(stocks.length), cost: new Float64Array(stocks.length) };
     for (const group of this.groups) {
       const worth = kinds.map((kind) => values[kind.index]! - group.credit * kind.area);
-      for (const way of ["y", "x"] as const) this.priceOneWay(group, way, worth, limits, prices);
+      for (const way of ["y", "x"] as const)
+        if (!this.priceOneWay(group, way, worth, limits, prices, mayGoOn)) return null;
       for (const stock of group.stocks)
         prices.cost[stock.index] = stock.cost - stock.credit * stock.length * stock.width;
     }
     return prices;
   }
 
-  private priceOneWay(group: Group, way: Way, worth: number[], limits: ArrayLike<number>, { most }: Prices): void {
+  private priceOneWay(
+    group: Group,
+    way: Way,
+    worth: number[],
+    limits: ArrayLike<number>,
+    { most }: Prices,
+    mayGoOn: () => boolean,
+  ): boolean {
     const { kerf } = this.task;
     const along = { longest: group.longest[otherWay(way)], step: this.grid[otherWay(way)] };
     const across = { longest: group.longest[way], step: this.grid[way] };
     const table = this.tableOf(group, way, worth, limits, across, along);
     const known = new Map<number, Float64Array>();
-    for (const stock of group.stocks) {
+    for (const [index, stock] of group.stocks.entries()) {
+      if (index % 32 === 0 && !mayGoOn()) return false;
       const [stockAlong, stockAcross] =
         way === "y" ? [stock.length + kerf, stock.width + kerf] : [stock.width + kerf, stock.length + kerf];
       const key = Math.floor(stockAlong / along.step + 1e-9);
@@ -80,6 +90,7 @@ export class BoardPricer {
       const value = values[Math.floor(stockAcross / across.step + 1e-9)]!;
       if (value > most[stock.index]!) most[stock.index] = value;
     }
+    return true;
   }
 
   private tableOf(

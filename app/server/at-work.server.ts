@@ -19,7 +19,10 @@ async function findAtWork(context: Readonly<RouterContextProvider>): Promise<AtW
 }
 
 /** Guards a shop's pages: a stranger signs in and comes back, a person without a shop chooses or opens one. */
-export const requireAtWork: MiddlewareFunction<Response> = async ({ context, params, url }) => {
+export const requireAtWork: MiddlewareFunction<Response> = async ({ request, context, params, url }) => {
+  // The framework asks this for addresses that have a page, not for buttons that post to one without.
+  if (isWrite(request) && request.headers.has("Origin") && !isOwnOrigin(request))
+    throw data({ why: "origin" }, { status: 403 });
   const found = await findAtWork(context);
   if (found === "sign in")
     throw redirect(`${href("/sign-in")}?${new URLSearchParams({ to: url.pathname + url.search })}`);
@@ -28,10 +31,9 @@ export const requireAtWork: MiddlewareFunction<Response> = async ({ context, par
   context.set(atWorkContext, found);
 };
 
-/** Guards JSON addresses: answers in JSON, and takes writes from our own pages only, as the framework checks that for pages alone. */
+/** Guards JSON addresses: answers in JSON, and takes writes from our own pages only. */
 export const requireAtWorkJson: MiddlewareFunction<Response> = async ({ request, context, params }) => {
-  if (request.method !== "GET" && request.method !== "HEAD" && !isOwnOrigin(request))
-    throw data({ why: "origin" }, { status: 403 });
+  if (isWrite(request) && !isOwnOrigin(request)) throw data({ why: "origin" }, { status: 403 });
   const found = await findAtWork(context);
   if (typeof found === "string") throw data({ why: found }, { status: found === "sign in" ? 401 : 403 });
   requireIdentifiers(params);
@@ -41,6 +43,10 @@ export const requireAtWorkJson: MiddlewareFunction<Response> = async ({ request,
 /** What cannot be an identifier is not here, and never gets as far as a query: the database refuses to compare some of it. */
 function requireIdentifiers(params: Record<string, string | undefined>): void {
   for (const [name, value] of Object.entries(params)) if (name.endsWith("Id") && !isIdentifier(value)) notHere();
+}
+
+function isWrite({ method }: Request): boolean {
+  return method !== "GET" && method !== "HEAD";
 }
 
 /** A browser says where a write comes from. One that says nothing is no browser of ours. */

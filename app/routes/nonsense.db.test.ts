@@ -1,6 +1,6 @@
 import { describe, expect, test } from "vitest";
+import { asked } from "#tests/factories/asked-routes.ts";
 import { useTwoShops } from "#tests/factories/two-shops.ts";
-import { asked } from "./asked.fixture.ts";
 
 const scene = useTwoShops();
 

@@ -1,7 +1,7 @@
 import { describe, expect, test } from "vitest";
+import { type AskedRoute, asked } from "#tests/factories/asked-routes.ts";
 import type { FurnishedShop } from "#tests/factories/furnished-shop.ts";
 import { useTwoShops } from "#tests/factories/two-shops.ts";
-import { type AskedRoute, asked } from "./asked.fixture.ts";
 
 const scene = useTwoShops();
 
@@ -105,6 +105,19 @@ describe("a record of another shop is not there", () => {
     const before = await scene.written();
     expect((await app.post("/deliveries/new", cookies.owner, form)).status).toBe(400);
     expect((await app.post(`/deliveries/${shop.deliveryId}/edit`, cookies.owner, form)).status).toBe(400);
+    expect(await scene.written()).toBe(before);
+  });
+});
+
+describe("a plan of another shop's boards", () => {
+  test("holds nothing, here or there", async () => {
+    const { app, cookies, shop, other } = scene;
+    const whole = (boardId: string) => ({ boardId, fromMm: 0, toMm: 500 });
+    const stretches = JSON.stringify([whole(shop.spareBoardId), whole(other.spareBoardId)]);
+    const before = await scene.written();
+    const { status, body } = await app.post(`/projects/${shop.projectId}/plan`, cookies.owner, { stretches });
+    expect(status).toBe(409);
+    expect(JSON.parse(body).actionData).toEqual({ "routes/projects/plan.tsx": { changed: [] } });
     expect(await scene.written()).toBe(before);
   });
 });

@@ -3,9 +3,17 @@ import type { Knex } from "knex";
 import { pino } from "pino";
 import { createRequestHandler, type RouterContextProvider, type ServerBuild } from "react-router";
 import routes from "#app/routes.ts";
-import { dbContext, logContext, mailerContext, ringReaderContext, storageContext } from "#app/server/context.server.ts";
+import {
+  dbContext,
+  logContext,
+  mailerContext,
+  plannerContext,
+  ringReaderContext,
+  storageContext,
+} from "#app/server/context.server.ts";
 import { findVisitor } from "#app/server/visit.server.ts";
 import type { Letter } from "#app/services/mail.server.ts";
+import type { Planner } from "#app/services/planner.server.ts";
 import type { RingReader } from "#app/services/ring-reader.server.ts";
 import type { Storage } from "#app/services/storage.server.ts";
 
@@ -64,7 +72,13 @@ export interface Answer {
 export interface ShopApp {
   get(path: string, cookie?: string): Promise<Answer>;
   /** Posts a form, or JSON, as a page of ours would. */
-  post(path: string, cookie: string, sent: Record<string, string> | { json: unknown }): Promise<Answer>;
+  post(
+    path: string,
+    cookie: string,
+    sent: Record<string, string> | { json: unknown },
+    /** The page it comes from, as a browser says; null when nothing says so. */
+    origin?: string | null,
+  ): Promise<Answer>;
 }
 
 const base = "http://rack.example";
@@ -72,6 +86,12 @@ const base = "http://rack.example";
 /** A reader that sees nothing on any photo. */
 const blindReader: RingReader = {
   ask: async () => ({ ok: false, message: "Nothing was seen.", corners: null }),
+  close: async () => {},
+};
+
+/** A planner that plans nothing. */
+const idlePlanner: Planner = {
+  ask: async () => ({ ok: false, error: "Nothing was planned." }),
   close: async () => {},
 };
 
@@ -89,6 +109,7 @@ export async function shopApp(outside: { db: () => Knex; storage: Storage }): Pr
     context.set(storageContext, outside.storage);
     context.set(logContext, log);
     context.set(ringReaderContext, blindReader);
+    context.set(plannerContext, idlePlanner);
     context.set(mailerContext, { send: async (letter) => void letters.push(letter), close: () => {} });
   };
   let broken: unknown = null;
@@ -121,27 +142,20 @@ export async function shopApp(outside: { db: () => Knex; storage: Storage }): Pr
     broken = null;
     const response = await handle(request);
     // What the framework hides from people as a 500 is a bug, and the test wants to see it.
-    if (broken instanceof Error) throw broken;
+    if (broken instanceof Error && response.status >= 500) throw broken;
     const { status, headers } = response;
     return { status, headers, location: headers.get("Location"), body: await response.text() };
   }
 
   return {
     get: (path, cookie = "") => ask(new Request(base + path, { headers: { Cookie: cookie } })),
-    post(path, cookie, sent) {
-      const headers = { Cookie: cookie, Origin: base, Host: "rack.example" };
-      if (!("json" in sent))
-        return ask(
-          new Request(base + path, {
-            method: "POST",
-            headers,
-            body: new URLSearchParams(sent as Record<string, string>),
-          }),
-        );
-      const body = JSON.stringify(sent.json);
-      return ask(
-        new Request(base + path, { method: "POST", headers: { ...headers, "Content-Type": "application/json" }, body }),
-      );
+    post(path, cookie, sent, origin = base) {
+      const headers = new Headers({ Cookie: cookie, Host: "rack.example" });
+      if (origin !== null) headers.set("Origin", origin);
+      const isJson = "json" in sent;
+      if (isJson) headers.set("Content-Type", "application/json");
+      const body = isJson ? JSON.stringify(sent.json) : new URLSearchParams(sent as Record<string, string>);
+      return ask(new Request(base + path, { method: "POST", headers, body }));
     },
   };
 }

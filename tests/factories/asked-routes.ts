@@ -1,5 +1,5 @@
 import type { Permission } from "#app/domain/shop/permissions.ts";
-import type { FurnishedShop } from "#tests/factories/furnished-shop.ts";
+import type { FurnishedShop } from "./furnished-shop.ts";
 
 export type Sent = Record<string, string> | { json: unknown };
 
@@ -73,6 +73,12 @@ export const asked: Record<string, AskedRoute> = {
     get: "board:correct",
     post: "board:correct",
     form: () => ({ to: "lost" }),
+  },
+  "routes/boards/offcut.tsx": {
+    at: (shop) => `/boards/${shop.benchBoardId}/offcut`,
+    get: "board:correct",
+    post: "board:correct",
+    form: () => ({ alongMm: "0", acrossMm: "0", lengthMm: "20", widthMm: "4" }),
   },
   "routes/boards/defects.tsx": {
     at: (shop) => `/boards/${shop.boardId}/defects`,
@@ -232,6 +238,13 @@ export const asked: Record<string, AskedRoute> = {
       ringMaxDeg: "90",
     }),
   },
+  "routes/projects/plan.tsx": {
+    at: (shop) => `/projects/${shop.projectId}/plan`,
+    get: "project:change",
+    post: "hold:place",
+    form: (shop) => ({ stretches: JSON.stringify([{ boardId: shop.spareBoardId, fromMm: 0, toMm: 500 }]) }),
+  },
+  "routes/projects/take-down.tsx": { at: (shop) => `/projects/${shop.projectId}/take-down`, get: "board:take-down" },
   ...Object.fromEntries(
     ["list", "measure", "claim", "air", "meter", "rings", "leg", "ready", "movement", "weight"].map((name) => [
       `routes/calculators/${name}.tsx`,

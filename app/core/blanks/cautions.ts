@@ -1,0 +1,141 @@
+/** What is about to be done, as far as it is known. What is left out raises no caution. Sizes in mm. */
+export interface Situation {
+  /** The piece that goes over or through a machine. */
+  piece?: { lengthMm: number; widthMm: number; thicknessMm: number };
+  jointer?: { minLengthMm: number; maxWidthMm: number };
+  planer?: { minLengthMm: number; maxWidthMm: number };
+  /** How high a rip stands on the table saw, and how high its blade cuts. */
+  rip?: { heightMm: number; bladeHeightMm: number };
+  /** Thick stock is parted through its thickness. */
+  resawing?: boolean;
+  dust?: { words: string; strongSensitiser: boolean } | null;
+  trade?: { words: string } | null;
+  /** Load of an arm over its rating. */
+  armLoadShare?: number;
+  liftKg?: number;
+  gluing?: { temperatureC?: number; moisturesPct?: readonly number[] };
+}
+
+export interface Caution {
+  id: string;
+  words: string;
+  source: string;
+}
+
+interface Row {
+  id: string;
+  when: (situation: Situation) => boolean;
+  words: (situation: Situation) => string;
+  source: string;
+}
+
+const inches = (n: number) => n * 25.4;
+const manual = "The machine's manual, local safety law and trained practice come first.";
+const shopRules = "School and shop rules (trade reference, section 10)";
+
+/** One table: the condition, the words, where they come from. Thresholds are those of the sources; a machine's own limits, where the shop has entered them, replace them. */
+const table: Row[] = [
+  {
+    id: "jointer-short",
+    when: ({ piece, jointer }) => Boolean(piece && piece.lengthMm < (jointer?.minLengthMm ?? inches(12))),
+    words: () => `Too short for the jointer: mill it long and cut to length last, or plane it by hand. ${manual}`,
+    source: `${shopRules} [secondary]: at least 12 in; one maker's manual says 10 in`,
+  },
+  {
+    id: "jointer-thin",
+    when: ({ piece }) => Boolean(piece && piece.thicknessMm < inches(1 / 4)),
+    words: () => `Too thin for jointer or planer without a carrier board: under 1/4 in. ${manual}`,
+    source: `${shopRules} [secondary]`,
+  },
+  {
+    id: "jointer-narrow",
+    when: ({ piece }) => Boolean(piece && piece.widthMm < inches(3)),
+    words: () =>
+      `Narrower than 3 in: a push stick on edges and a push block on faces, hands never over the cutter. ${manual}`,
+    source: `${shopRules} [secondary]`,
+  },
+  {
+    id: "jointer-wide",
+    when: ({ piece, jointer }) => Boolean(piece && jointer && piece.widthMm > jointer.maxWidthMm),
+    words: () => "Wider than this shop's jointer: rip it first, or flatten it another way.",
+    source: "The shop's own setting",
+  },
+  {
+    id: "planer-short",
+    when: ({ piece, planer }) => Boolean(piece && piece.lengthMm < (planer?.minLengthMm ?? inches(14))),
+    words: () =>
+      `Shorter than the gap between the planer's rollers may be: it can turn or kick back. Plane it long. ${manual}`,
+    source: `${shopRules} [secondary]: often 12 to 14 in; small machines print about 6 in`,
+  },
+  {
+    id: "planer-wide",
+    when: ({ piece, planer }) => Boolean(piece && planer && piece.widthMm > planer.maxWidthMm),
+    words: () => "Wider than this shop's planer.",
+    source: "The shop's own setting",
+  },
+  {
+    id: "rip-tall",
+    when: ({ rip }) => Boolean(rip && rip.heightMm > rip.bladeHeightMm),
+    words: () =>
+      `Taller than the blade cuts in one pass. A bandsaw is the better tool. On a table saw it takes two passes, turned end for end with the same face to the fence: riving knife, guard where it can stay, featherboards, push blocks, and out of the line of the blade. ${manual}`,
+    source: "Common practice (trade reference, section 10); 29 CFR 1910.213 (c), (s)(9), from memory",
+  },
+  {
+    id: "resaw-tension",
+    when: ({ resawing }) => Boolean(resawing),
+    words: () =>
+      `Thick stock moves when it is parted: tension lets go and can close on the blade. Stop, wedge, let it rest a day, then flatten again. ${manual}`,
+    source: "Common practice (trade reference, section 10)",
+  },
+  {
+    id: "dust",
+    when: ({ dust }) => Boolean(dust),
+    words: ({ dust }) =>
+      `${dust?.words}${dust?.strongSensitiser ? " It is among the woods that sensitise most." : ""} Collect dust where it is made and wear a mask that fits.`,
+    source: "HSE WIS30 Toxic woods (species words from memory); NIOSH limit 1 mg/m³ [confirmed, OSHA wood-dust page]",
+  },
+  {
+    id: "trade",
+    when: ({ trade }) => Boolean(trade),
+    words: ({ trade }) => `${trade?.words} Keep its papers with the board's record, and check the current appendices.`,
+    source: "CITES appendices, from memory",
+  },
+  {
+    id: "arm-load",
+    when: ({ armLoadShare }) => (armLoadShare ?? 0) > 1,
+    words: () =>
+      "More on this arm than the rating the shop entered: take boards off. A rating kept does not make a rack safe; its maker's instructions and its anchors do.",
+    source: "Trade reference, section 13: common practice; 29 CFR 1910.176(b), from memory",
+  },
+  {
+    id: "lift",
+    when: ({ liftKg }) => (liftKg ?? 0) > 23,
+    words: () => "Heavier than one person should lift even in a good place: take it by two, or slide it.",
+    source: "NIOSH lifting equation's load constant, 23 kg, from memory",
+  },
+  {
+    id: "glue-cold",
+    when: ({ gluing }) => gluing?.temperatureC !== undefined && gluing.temperatureC < 10,
+    words: () =>
+      "Colder than most wood glues take (about 50 °F, 10 °C): the film chalks and does not hold. The label says what yours needs.",
+    source: "Trade reference, section 11: common practice",
+  },
+  {
+    id: "glue-moisture",
+    when: ({ gluing }) => spread(gluing?.moisturesPct) > 2,
+    words: () =>
+      "The plies are more than 2 points of moisture apart: they will part again, or cup. Let them even out before gluing.",
+    source: "Trade reference, section 11: common practice, 1 to 2 points",
+  },
+];
+
+function spread(values: readonly number[] = []): number {
+  return values.length > 1 ? Math.max(...values) - Math.min(...values) : 0;
+}
+
+/** The cautions that a situation calls for, each with where it comes from. They stand beside the number that calls for them. */
+export function cautionsFor(situation: Situation): Caution[] {
+  return table
+    .filter(({ when }) => when(situation))
+    .map(({ id, words, source }) => ({ id, words: words(situation), source }));
+}

@@ -1,0 +1,92 @@
+import { requireSize, requireWithin } from "#app/core/moisture/accepted-range.ts";
+import { type PlyPlan, pliesNeeded } from "./plies.ts";
+
+export interface Size {
+  lengthMm: number;
+  widthMm: number;
+  thicknessMm: number;
+}
+
+export interface MillingAllowances {
+  lengthMm: number;
+  widthMm: number;
+  thicknessMm: number;
+  jointPerFaceMm: number;
+}
+
+export interface MillingStep {
+  /** What is done. */
+  step:
+    | "rough length"
+    | "joint a face"
+    | "rip to rough width"
+    | "glue up"
+    | "joint face and edge"
+    | "plane to thickness"
+    | "rip and plane to width"
+    | "cut to length";
+  /** The piece after it; plies before the glue-up, the blank from it on. */
+  size: Size;
+  pieces: number;
+}
+
+export interface MillingSheet {
+  plies: PlyPlan;
+  steps: MillingStep[];
+}
+
+/**
+ * The sizes of a blank at each step from rough to finished, long pieces cut to length last (trade reference, section 10: common practice).
+ *
+ * @param finished the part.
+ * @param stockMm measured thickness of the rough stock.
+ * @returns null when the stock cannot make the thickness.
+ */
+export function millingSheet(finished: Size, stockMm: number, allow: MillingAllowances): MillingSheet | null {
+  requireSize("Finished length", finished.lengthMm);
+  requireSize("Finished width", finished.widthMm);
+  requireWithin("Length allowance", allow.lengthMm, 0, 1_000, "mm");
+  requireWithin("Width allowance", allow.widthMm, 0, 500, "mm");
+  const plies = pliesNeeded({
+    finishedMm: finished.thicknessMm,
+    stockMm,
+    jointPerFaceMm: allow.jointPerFaceMm,
+    allowanceMm: allow.thicknessMm,
+  });
+  if (!plies) return null;
+  const lengthMm = finished.lengthMm + allow.lengthMm;
+  const widthMm = finished.widthMm + allow.widthMm;
+  // Half of the width's allowance goes when the first edge is jointed, the rest when the second is.
+  const jointedMm = widthMm - allow.widthMm / 2;
+  const step = (
+    name: MillingStep["step"],
+    pieces: number,
+    thicknessMm: number,
+    width = widthMm,
+    length = lengthMm,
+  ): MillingStep => ({
+    step: name,
+    pieces,
+    size: { lengthMm: length, widthMm: width, thicknessMm },
+  });
+  const glued = plies.plies > 1;
+  const steps = [
+    step("rough length", plies.plies, stockMm),
+    step("rip to rough width", plies.plies, stockMm),
+    ...(glued ? [step("joint a face", plies.plies, plies.outerPlyMm), step("glue up", 1, plies.gluedMm)] : []),
+    step("joint face and edge", 1, finished.thicknessMm + plies.toTakeOffMm / 2, jointedMm),
+    step("plane to thickness", 1, finished.thicknessMm, jointedMm),
+    step("rip and plane to width", 1, finished.thicknessMm, finished.widthMm),
+    step("cut to length", 1, finished.thicknessMm, finished.widthMm, finished.lengthMm),
+  ];
+  return { plies, steps };
+}
+
+/** How many rough lengths a board gives when it is split: each part's length and allowance, and a kerf between. */
+export function roughLengths(boardMm: number, partMm: number, allowanceMm: number, kerfMm: number): number {
+  requireSize("Board", boardMm);
+  requireSize("Part", partMm);
+  requireWithin("Allowance", allowanceMm, 0, 1_000, "mm");
+  requireWithin("Kerf", kerfMm, 0, 20, "mm");
+  return Math.floor((boardMm + kerfMm) / (partMm + allowanceMm + kerfMm) + 1e-9);
+}

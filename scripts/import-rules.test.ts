@@ -78,7 +78,9 @@ describe("what only some may do", () => {
   it("imports a route in tests only", () => {
     const text = 'import { loader } from "./boards/board.tsx";';
     expect(check("app/routes/roles.db.test.ts", text)).toEqual([]);
+    expect(check("tests/factories/shop.ts", 'import "#app/routes/boards/board.tsx";')).toEqual([]);
     expect(check("app/routes/home.ts", text)).toHaveLength(1);
+    expect(check("scripts/demo.ts", 'import "#app/routes/boards/board.tsx";')).toHaveLength(1);
   });
   it("reads process.env in services only", () => {
     expect(check("app/server/a.server.ts", "\nconst port = process.env.PORT;")).toEqual([

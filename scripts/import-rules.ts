@@ -95,7 +95,7 @@ function layerOf(file: string): string | null {
 }
 
 function isTest(file: string): boolean {
-  return /\.test\.tsx?$/.test(file);
+  return file.startsWith("tests/") || /\.test\.tsx?$/.test(file);
 }
 
 function lineAt(text: string, position: number): number {

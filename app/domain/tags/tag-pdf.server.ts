@@ -67,7 +67,7 @@ function drawTag(
   const code = Math.min(height - 2 * pad, width * 0.42);
   drawCode(pdf, address, width - pad - code, (height - code) / 2, code);
   const room = width - code - 3 * pad;
-  const line = (height - 2 * pad) / 5.2;
+  const line = (height - 2 * pad) / 5.6;
   pdf.fillColor("#000000");
   pdf
     .font("tag")

@@ -17,6 +17,9 @@ export interface TwoShops {
   cookies: Record<Role, string>;
   /** The transaction of the running test. */
   db: () => Knex;
+  /** Another connection, outside the running test. */
+  pool: () => Knex;
+  storage: () => Storage;
   /** What is written in every table of the shops, in short: the same text means that nothing has changed. */
   written(): Promise<string>;
 }
@@ -29,7 +32,11 @@ export function useTwoShops(): TwoShops {
   let fresh: FreshDatabase;
   let files: TestStorage;
   let transaction: Knex.Transaction;
-  const scene: Partial<TwoShops> = { db: () => transaction };
+  const scene: Partial<TwoShops> = {
+    db: () => transaction,
+    pool: () => fresh.db,
+    storage: () => ({ ...files.storage, delete: async () => {} }),
+  };
 
   beforeAll(async () => {
     [fresh, files] = await Promise.all([freshDatabase(), startTestStorage()]);
@@ -41,8 +48,7 @@ export function useTwoShops(): TwoShops {
       maker: await signedIn(fresh.db, maker),
       helper: await signedIn(fresh.db, helper),
     };
-    const keeping: Storage = { ...files.storage, delete: async () => {} };
-    scene.app = await shopApp({ db: () => transaction, storage: keeping });
+    scene.app = await shopApp({ db: () => transaction, storage: (scene as TwoShops).storage() });
     const [tables] = await fresh.db.raw("SHOW TABLES");
     const names = tables
       .map((row: Record<string, string>) => Object.values(row)[0])

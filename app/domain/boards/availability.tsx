@@ -8,10 +8,13 @@ interface AvailabilityProps {
   boardId: string;
   lengthMm: number;
   /** What this page was drawn with: when the answer differs, the page is drawn anew. */
-  drawn: { state: string; holdIds: string[] };
+  drawn: { state: string; holdIds: string[]; freeMm: number };
 }
 
-/** How much of the board is free at this moment, though the page may have been open for an hour. */
+/**
+ * How much of the board is free at this moment, though the page may have been open for an hour. The words are those of the page as drawn, so that they
+ * never disagree with the holds beside them; the answer to the question asked every few seconds only tells when to draw it anew.
+ */
 export function Availability({ boardId, lengthMm, drawn }: AvailabilityProps) {
   const { data } = useQuery(availabilityQuery(boardId));
   const { revalidate } = useRevalidator();
@@ -20,16 +23,15 @@ export function Availability({ boardId, lengthMm, drawn }: AvailabilityProps) {
   useEffect(() => {
     if (seen !== null && seen !== shown) revalidate();
   }, [seen, shown, revalidate]);
-  if (!data) return null;
   return (
     <span aria-live="polite">
-      {data.freeMm >= lengthMm - 0.5 ? (
+      {drawn.freeMm >= lengthMm - 0.5 ? (
         "all of it free"
-      ) : data.freeMm < 1 ? (
+      ) : drawn.freeMm < 1 ? (
         "nothing free"
       ) : (
         <>
-          <LengthText mm={data.freeMm} /> free
+          <LengthText mm={drawn.freeMm} /> free
         </>
       )}
     </span>

@@ -10,6 +10,8 @@ import { BoardHistory } from "#app/domain/boards/board-history-list.tsx";
 import { getBoard } from "#app/domain/boards/boards.sql.server.ts";
 import { DefectList } from "#app/domain/boards/defect-list.tsx";
 import { listDefects } from "#app/domain/boards/defects.sql.server.ts";
+import { GradeCard } from "#app/domain/grade/grade-card.tsx";
+import { freeLengthMm } from "#app/domain/holds/hold.ts";
 import { HoldCards } from "#app/domain/holds/hold-cards.tsx";
 import { boardReadiness } from "#app/domain/moisture/board-readiness.ts";
 import { listMoistureReadings } from "#app/domain/moisture/moisture.sql.server.ts";
@@ -64,7 +66,11 @@ export default function BoardPage({ loaderData }: Route.ComponentProps) {
               <Availability
                 boardId={boardId}
                 lengthMm={board.lengthMm}
-                drawn={{ state: board.state, holdIds: board.holds.map((hold) => hold.holdId) }}
+                drawn={{
+                  state: board.state,
+                  holdIds: board.holds.map((hold) => hold.holdId),
+                  freeMm: freeLengthMm(board.lengthMm, board.holds),
+                }}
               />
             }
           >
@@ -75,9 +81,10 @@ export default function BoardPage({ loaderData }: Route.ComponentProps) {
           <MoistureCard boardId={boardId} readings={moisture} readiness={worked.readiness} />
           <MovementCard species={board.species} movement={worked.movement} />
           <DefectList board={board} defects={defects} mayNote={can(role, "board:correct")} />
+          <GradeCard board={board} defects={defects} />
           <BoardHistory events={events} />
         </div>
-        <div className="contents gap-4 lg:sticky lg:top-4 lg:grid">
+        <div className="contents gap-4 lg:grid">
           <BoardFacts board={board} role={role} />
           <WeightCard weight={worked.weight} />
           <div className="flex flex-wrap gap-2">
@@ -123,8 +130,12 @@ function BoardActions({ board, mayReserve }: BoardActionsProps) {
         </ButtonLink>
       ) : null}
       <div className="grid grid-cols-3 gap-2 md:flex">
-        <ButtonLink to={href("/boards/:boardId/moisture", at) + toPanel}>Moisture</ButtonLink>
-        <ButtonLink to={href("/boards/:boardId/move", at) + toPanel}>Move</ButtonLink>
+        <ButtonLink className="px-2 md:px-4" to={href("/boards/:boardId/moisture", at) + toPanel}>
+          Moisture
+        </ButtonLink>
+        <ButtonLink className="px-2 md:px-4" to={href("/boards/:boardId/move", at) + toPanel}>
+          Move
+        </ButtonLink>
         {racked || board.state === "out" ? (
           <Form method="post" action={href("/boards/:boardId/state", at)} className="grid">
             <Button className="whitespace-nowrap px-2" name="intent" value={racked ? "take down" : "put back"}>

@@ -1,4 +1,4 @@
-import type { ReactNode } from "react";
+import { type ReactNode, useEffect, useRef } from "react";
 
 const looks = {
   wrong: "border-wrong bg-wrong-ground text-wrong",
@@ -14,12 +14,21 @@ interface NoticeProps {
   className?: string;
 }
 
-/** Something that must be read: a refusal, a caution, or word that a thing was done. Announced when it appears. */
+/**
+ * Something that must be read: a refusal, a caution, or word that a thing was done. Announced when it appears; a refusal comes into view too, since the
+ * button that was pressed may be a screen below it on a phone. It never moves the page under somebody who is typing.
+ */
 export function Notice({ kind = "plain", title, children, className = "" }: NoticeProps) {
+  const box = useRef<HTMLDivElement>(null);
+  useEffect(() => {
+    if (kind === "wrong" && !document.activeElement?.matches("input, select, textarea"))
+      box.current?.scrollIntoView({ block: "nearest" });
+  }, [kind]);
   return (
     <div
+      ref={box}
       role={kind === "wrong" ? "alert" : "status"}
-      className={`rounded-lg border-l-4 px-4 py-3 ${looks[kind]} ${className}`}
+      className={`scroll-my-4 rounded-lg border-l-4 px-4 py-3 ${looks[kind]} ${className}`}
     >
       {title ? <p className="font-semibold">{title}</p> : null}
       {children ? <div className="text-ink">{children}</div> : null}

@@ -45,7 +45,8 @@ export async function action({ params, request, context }: Route.ActionArgs) {
   const stretch = stretchOf(submission.value, board.lengthMm);
   const placed = await placeHold(db, actor, { boardId: board.id, projectId, note, ...stretch, expiresAt: end.at }, now);
   if (!placed.ok && placed.why === "missing") notHere();
-  if (!placed.ok) return data({ result: submission.reply(), refusal: placed }, { status: 409 });
+  if (!placed.ok)
+    return data({ result: submission.reply(), refusal: placed, refusedAt: now.getTime() }, { status: 409 });
   return redirect(href("/boards/:boardId", { boardId: board.id }));
 }
 
@@ -67,7 +68,7 @@ export default function Reserve({ loaderData, actionData }: Route.ComponentProps
       <div className="grid max-w-3xl gap-4">
         <BoardEnd board={board} heightPx={56} />
         <BoardLength board={board} />
-        {actionData?.refusal ? <HoldRefused refusal={actionData.refusal} /> : null}
+        {actionData?.refusal ? <HoldRefused key={actionData.refusedAt} refusal={actionData.refusal} /> : null}
         {projects.length === 0 ? (
           <Empty
             title="No project to reserve it for"

@@ -5,7 +5,7 @@ import { Notice } from "./notice.tsx";
 export type SendStage =
   | { at: "idle" }
   | { at: "sending"; share: number }
-  | { at: "refused"; words: string; file: File };
+  | { at: "refused"; words: string; file: File; isWorthAgain: boolean };
 
 interface SendingProps {
   /** What is sent: "photo". */
@@ -14,15 +14,17 @@ interface SendingProps {
   onAgain: (file: File) => void;
 }
 
-/** The bar while a file is sent; when it was refused, why, and the way to send it again. */
+/** The bar while a file is sent; when it was refused, why, and the way to send it again, where the same file can succeed. */
 export function Sending({ what, stage, onAgain }: SendingProps) {
   if (stage.at === "idle") return null;
   if (stage.at === "refused")
     return (
       <Notice kind="wrong" title={stage.words}>
-        <Button type="button" className="mt-2" onClick={() => onAgain(stage.file)}>
-          Send it again
-        </Button>
+        {stage.isWorthAgain ? (
+          <Button type="button" className="mt-2" onClick={() => onAgain(stage.file)}>
+            Send it again
+          </Button>
+        ) : null}
       </Notice>
     );
   return (

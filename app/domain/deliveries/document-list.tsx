@@ -61,8 +61,8 @@ function AddDocument({ deliveryId }: { deliveryId: string }) {
 
   async function send(file: File) {
     setStage({ at: "sending", share: 0 });
-    const words = await sendDocument(file, deliveryId, (share) => setStage({ at: "sending", share }));
-    if (words) return setStage({ at: "refused", words, file });
+    const refused = await sendDocument(file, deliveryId, (share) => setStage({ at: "sending", share }));
+    if (refused) return setStage({ at: "refused", ...refused, file });
     await revalidate();
     setStage({ at: "idle" });
   }

@@ -1,20 +1,26 @@
 import { href } from "react-router";
-import { sendFile, sendingWords } from "#app/domain/files/send-file.ts";
+import { isWorthSendingAgain, sendFile, sendingWords } from "#app/domain/files/send-file.ts";
 import { type DocumentRefusal, documentRefusalWords, documentTypes, mostDocumentBytes } from "./document.ts";
+
+/** What to tell somebody whose paper was not taken in, and whether the same file can succeed at a second try. */
+export interface PaperRefused {
+  words: string;
+  isWorthAgain: boolean;
+}
 
 /**
  * Sends a paper of a delivery from the browser straight to the file store.
  *
  * @param onProgress share of the file sent, 0 to 1.
- * @returns null when it was taken in, else what to tell.
+ * @returns null when it was taken in.
  */
 export async function sendDocument(
   file: File,
   deliveryId: string,
   onProgress: (share: number) => void,
-): Promise<string | null> {
-  if (file.size > mostDocumentBytes) return documentRefusalWords("too large");
-  if (file.size === 0) return documentRefusalWords("broken");
+): Promise<PaperRefused | null> {
+  if (file.size > mostDocumentBytes) return refused("too large");
+  if (file.size === 0) return refused("broken");
   const contentType = documentTypes.split(",").includes(file.type) ? file.type : "application/pdf";
   const sent = await sendFile(file, {
     begin: {
@@ -24,6 +30,9 @@ export async function sendDocument(
     confirmAddress: (documentId) => href("/api/documents/:documentId/confirm", { documentId }),
     onProgress,
   });
-  if (sent.ok) return null;
-  return sendingWords[sent.why] ?? documentRefusalWords(sent.why as DocumentRefusal);
+  return sent.ok ? null : refused(sent.why as DocumentRefusal);
+}
+
+function refused(why: DocumentRefusal): PaperRefused {
+  return { words: sendingWords[why] ?? documentRefusalWords(why), isWorthAgain: isWorthSendingAgain(why) };
 }

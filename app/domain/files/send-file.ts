@@ -16,6 +16,11 @@ export const sendingWords: Record<string, string> = {
   "connection lost": "The connection was lost. Send it again.",
 };
 
+/** Whether the very same file can succeed at a second try: it got lost on the way, and was not found wanting. */
+export function isWorthSendingAgain(why: string): boolean {
+  return why in sendingWords || why === "not arrived";
+}
+
 const tries = 3;
 
 interface Sending {

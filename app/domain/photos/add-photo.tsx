@@ -20,7 +20,7 @@ export function AddPhoto({ boardId, hasNearEnd }: { boardId: string; hasNearEnd:
   async function send(file: File) {
     setStage({ at: "sending", share: 0 });
     const sent = await sendPhoto(file, { boardId, kind }, (share) => setStage({ at: "sending", share }));
-    if (!sent.ok) return setStage({ at: "refused", words: sent.words, file });
+    if (!sent.ok) return setStage({ at: "refused", words: sent.words, isWorthAgain: sent.isWorthAgain, file });
     setStage({ at: "idle" });
     await queries.invalidateQueries({ queryKey: ["boards", boardId] });
     // An end is photographed to read its rings: that is the next step.

@@ -1,8 +1,8 @@
 import { href } from "react-router";
-import { sendFile, sendingWords } from "#app/domain/files/send-file.ts";
+import { isWorthSendingAgain, sendFile, sendingWords } from "#app/domain/files/send-file.ts";
 import { mostPhotoBytes, type PhotoKind, type PhotoRefusal, refusalWords } from "./photo.ts";
 
-export type Sent = { ok: true; photoId: string } | { ok: false; words: string };
+export type Sent = { ok: true; photoId: string } | { ok: false; words: string; isWorthAgain: boolean };
 
 /**
  * Sends a photo from the browser straight to the file store.
@@ -28,5 +28,5 @@ export async function sendPhoto(
 }
 
 function refused(why: PhotoRefusal): Sent {
-  return { ok: false, words: sendingWords[why] ?? refusalWords(why) };
+  return { ok: false, words: sendingWords[why] ?? refusalWords(why), isWorthAgain: isWorthSendingAgain(why) };
 }

@@ -127,9 +127,16 @@ describe("searching", () => {
     ana = await anActor(fresh.db);
     const words = [
       { name: "barn", tag: "WO-0007", notes: "From the old barn, with a live edge; 100% air-dried_outside" },
-      { name: "quilt", tag: "MA-0070", species: "hard-maple", figureKind: "quilt", notes: "O'Brien's log" },
+      {
+        name: "quilt",
+        tag: "MA-0070",
+        species: "hard-maple",
+        figureKind: "quilt",
+        notes: "O'Brien's log",
+        ringClass: "rift",
+      },
       { name: "bird", tag: "MA-0142", species: "hard-maple", figureKind: "bird's eye", colourNote: "crème, pommelé" },
-      { name: "elm", tag: "EL-0143", species: "american-elm", notes: "楓の木 🪵 Ulmenholz größer" },
+      { name: "elm", tag: "EL-0143", species: "american-elm", notes: "楓の木 🪵 Ulmenholz größer; lay flat" },
     ];
     for (const { name, tag, ...given } of words) {
       const board = {
@@ -141,6 +148,7 @@ describe("searching", () => {
         colourNote: "",
         notes: "",
         logName: "",
+        ringClass: null,
         ...given,
       };
       const { id } = await aBoard(fresh.db, ana, {
@@ -148,6 +156,7 @@ describe("searching", () => {
         tag_number: Number(tag.slice(3)),
         species: board.species,
         figure_kind: board.figureKind,
+        ring_class: board.ringClass,
         notes: board.notes,
         search_text: searchText(board),
       });
@@ -182,6 +191,11 @@ describe("searching", () => {
     ["100%", ["barn"]],
     ["楓の木", ["elm"]],
     ["ULMENHOLZ 🪵", ["elm"]],
+    ["rift", ["quilt"]],
+    ["Maple rift", ["quilt"]],
+    ["oak rift", []],
+    ["quartered maple", []],
+    ["flat elm", ["elm"]],
   ])("%s", async (q, expected) => {
     expect(await found(q)).toEqual(expected);
   });

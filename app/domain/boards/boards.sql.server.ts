@@ -1,5 +1,5 @@
 import type { Knex } from "knex";
-import type { RingField } from "#app/core/rings/ring-types.ts";
+import type { RingClass, RingField } from "#app/core/rings/ring-types.ts";
 import type { Actor } from "#app/domain/shop/actor.ts";
 import { can } from "#app/domain/shop/permissions.ts";
 import type { Board, BoardSummary, HoldMark } from "./board.ts";
@@ -75,7 +75,10 @@ const unindexed = new Set(
   "about are com for from how that the this was what when where who will with und www".split(" "),
 );
 
-/** Every word must begin some word of the board's text; a bare number is a tag number, and what looks like a tag is one, or its beginning. */
+/** Words for how the rings run: asked for as people say them, "oak rift", though they are no part of a board's text. */
+const ringWords = new Set<string>(["flat", "rift", "quartered"] satisfies RingClass[]);
+
+/** Every word must begin some word of the board's text, or name its ring class; a bare number is a tag number, and what looks like a tag is one, or its beginning. */
 function searchWords(query: Knex.QueryBuilder, typed: string): void {
   if (/^\d{1,9}$/.test(typed)) {
     query.where("b.tag_number", Number(typed));
@@ -87,9 +90,13 @@ function searchWords(query: Knex.QueryBuilder, typed: string): void {
     return;
   }
   const words = typed.match(/[\p{L}\p{N}]+/gu) ?? [];
+  const isRingWord = (word: string) => ringWords.has(word.toLowerCase());
   const isIndexed = (word: string) => word.length >= 3 && !unindexed.has(word.toLowerCase());
-  const long = words.filter(isIndexed);
-  for (const word of words.filter((word) => !isIndexed(word))) query.where("b.search_text", "like", `%${word}%`);
+  for (const word of words.filter(isRingWord))
+    query.where((either) => either.where("b.ring_class", word).orWhere("b.search_text", "like", `%${word}%`));
+  const others = words.filter((word) => !isRingWord(word));
+  const long = others.filter(isIndexed);
+  for (const word of others.filter((word) => !isIndexed(word))) query.where("b.search_text", "like", `%${word}%`);
   if (long.length > 0)
     query.whereRaw("MATCH (b.search_text) AGAINST (? IN BOOLEAN MODE)", long.map((word) => `+${word}*`).join(" "));
   if (words.length === 0) query.whereRaw("FALSE");

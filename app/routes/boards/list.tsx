@@ -60,7 +60,9 @@ export default function Boards({ loaderData }: Route.ComponentProps) {
             <Empty
               title={search ? "No board matches all of that" : "The rack is empty"}
               action={
-                mayReceive ? (
+                search ? (
+                  <ButtonLink to={href("/boards")}>Show the whole rack</ButtonLink>
+                ) : mayReceive ? (
                   <ButtonLink look="main" to={href("/deliveries/new")}>
                     Log a delivery
                   </ButtonLink>

@@ -1,4 +1,4 @@
-import type { ReactNode } from "react";
+import { type ReactNode, useEffect } from "react";
 import { Link } from "react-router";
 
 interface PanelProps {
@@ -13,6 +13,12 @@ export const toPanel = "#panel";
 
 /** A form opened inside a page, where the thing it changes stands. It has an address of its own, so it works without JavaScript and survives a reload. */
 export function Panel({ title, closeTo, children }: PanelProps) {
+  // Whoever saves or closes by keyboard goes on from the page, not from the top of the browser's window.
+  useEffect(() => {
+    return () => {
+      if (document.activeElement === document.body) document.getElementById("content")?.focus({ preventScroll: true });
+    };
+  }, []);
   return (
     <section
       id="panel"

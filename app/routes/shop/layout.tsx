@@ -40,7 +40,7 @@ export default function ShopLayout({ loaderData }: Route.ComponentProps) {
           people: can(role, "shop:people"),
         }}
       />
-      <main id="content" className="page">
+      <main id="content" tabIndex={-1} className="page outline-none">
         <Outlet />
       </main>
     </ShopViewProvider>

@@ -12,7 +12,7 @@ const look = {
 export type ButtonLook = keyof typeof look;
 
 const shape =
-  "inline-flex min-h-11 items-center justify-center gap-2 rounded-lg px-4 font-semibold no-underline transition-colors disabled:cursor-not-allowed disabled:opacity-55";
+  "inline-flex min-h-11 items-center justify-center gap-2 rounded-lg px-4 font-semibold no-underline transition-colors disabled:cursor-not-allowed disabled:opacity-55 print:hidden";
 
 /** The class names of a button, for elements that are buttons only in looks. */
 export function buttonClass(kind: ButtonLook = "plain", more = ""): string {

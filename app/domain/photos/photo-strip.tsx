@@ -43,6 +43,7 @@ export function PhotoStrip({ boardId, tag, photos, mayRemove }: PhotoStripProps)
                 <Link
                   to={href("/boards/:boardId/rings/:photoId", { boardId, photoId: photo.id })}
                   className="inline-flex min-h-11 items-center text-link underline"
+                  data-screen-only
                 >
                   Mark the rings
                 </Link>

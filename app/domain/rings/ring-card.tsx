@@ -22,6 +22,7 @@ export function RingCard({ board, readings, mayRead }: RingCardProps) {
     <Link
       to={href("/boards/:boardId/rings/by-eye", { boardId: board.id })}
       className="inline-flex min-h-11 items-center text-link underline-offset-4 hover:underline"
+      data-screen-only
     >
       Set the angle by eye
     </Link>

@@ -86,8 +86,8 @@ export function DeliveryFields({ fields, suppliers }: DeliveryFieldsProps) {
           </SelectField>
           <TextField label="Price" unit={currency} inputMode="decimal" autoComplete="off" {...of("priceMinor")} />
           <SelectField label="For" {...of("priceBasis")}>
-            <option value="bf">each board foot</option>
-            <option value="m3">each cubic metre</option>
+            <option value="bf">a board foot</option>
+            <option value="m3">a cubic metre</option>
             <option value="lump">the whole lot</option>
           </SelectField>
           <TextField

@@ -7,6 +7,12 @@ export interface Column {
   cost: number;
 }
 
+/** A basis of a master program with its inverse. */
+export interface SavedBasis {
+  basis: Int32Array;
+  inverse: Float64Array;
+}
+
 const PRICE_SLACK = 1e-9;
 const PIVOT_SLACK = 1e-9;
 const PIVOTS_BETWEEN_REFRESH = 100;
@@ -30,8 +36,10 @@ export class MasterProgram {
   private readonly basis: Int32Array;
   private readonly direction: Float64Array;
   /** Columns kept out: they may not enter, and cost this much more while they are still in. */
-  private blocked: Uint8Array = new Uint8Array(256);
+  private blocked: Uint8Array<ArrayBuffer> = new Uint8Array(257);
   private pivots = 0;
+  /** The columns once more, one after another in flat arrays: they are gone through at every step. */
+  private readonly flat = { starts: new Int32Array(257), rows: new Int32Array(2048), values: new Float64Array(2048) };
 
   /**
    * @param demands least sum of each of the first rows.
@@ -50,21 +58,26 @@ export class MasterProgram {
     this.duals = new Float64Array(this.size);
     this.direction = new Float64Array(this.size);
     this.setRights(demands);
-    this.basics = Float64Array.from(this.rights);
-    for (let row = 0; row < this.size; row++) {
-      this.inverse[row * this.size + row] = 1;
-      this.basis[row] = row < demands.length ? -1 - row : -1 - this.size - row;
-      if (row < demands.length) this.duals[row] = missing[row]!;
-    }
+    this.basics = new Float64Array(this.size);
+    this.begin();
   }
 
   add(column: Column): void {
-    this.columns.push(column);
-    if (this.columns.length > this.blocked.length) {
-      const longer = new Uint8Array(2 * this.blocked.length);
-      longer.set(this.blocked);
-      this.blocked = longer;
+    const { flat } = this;
+    const index = this.columns.push(column) - 1;
+    const start = flat.starts[index]!;
+    const end = start + column.rows.length;
+    if (index + 2 > flat.starts.length) {
+      flat.starts = longer(flat.starts);
+      this.blocked = longer(this.blocked);
     }
+    while (end > flat.rows.length) {
+      flat.rows = longer(flat.rows);
+      flat.values = longer(flat.values);
+    }
+    flat.rows.set(column.rows, start);
+    flat.values.set(column.values, start);
+    flat.starts[index + 1] = end;
   }
 
   /** Lowers the cost until no column helps, or work runs out. */
@@ -84,8 +97,33 @@ export class MasterProgram {
     for (let index = 0; index < this.columns.length; index++)
       this.blocked[index] = isBlocked(this.columns[index]!) ? 1 : 0;
     this.refresh();
-    for (let step = 0; this.leaveNegative(); step++) if (step > 20 * this.size) break;
+    for (let step = 0; step <= this.size; step++) if (!this.leaveNegative()) break;
+    if (this.basics.some((amount) => amount < -1e-9)) this.begin();
     for (let row = 0; row < this.size; row++) if (this.basics[row]! < 0) this.basics[row] = 0;
+  }
+
+  /** Starts with every demand uncovered and every limit unused. */
+  private begin(): void {
+    const { size, demands } = this;
+    this.inverse.fill(0);
+    this.basics.set(this.rights);
+    this.duals.fill(0);
+    for (let row = 0; row < size; row++) {
+      this.inverse[row * size + row] = 1;
+      this.basis[row] = row < demands.length ? -1 - row : -1 - size - row;
+      if (row < demands.length) this.duals[row] = this.missing[row]!;
+    }
+  }
+
+  /** The basis as it is, to come back to. */
+  save(): SavedBasis {
+    return { basis: this.basis.slice(), inverse: this.inverse.slice() };
+  }
+
+  /** Goes back to a saved basis; `change` has to follow. */
+  restore({ basis, inverse }: SavedBasis): void {
+    this.basis.set(basis);
+    this.inverse.set(inverse);
   }
 
   reducedCost(column: Column): number {
@@ -102,6 +140,14 @@ export class MasterProgram {
       if (this.basis[row]! >= 0 && this.basics[row]! > 1e-5)
         found.push({ column: this.basis[row]!, amount: this.basics[row]! });
     return found;
+  }
+
+  /** Sum of a column's values times the entries of an array at its rows. */
+  private dot(index: number, array: Float64Array, base: number): number {
+    const { starts, rows, values } = this.flat;
+    let sum = 0;
+    for (let i = starts[index]!, end = starts[index + 1]!; i < end; i++) sum += array[base + rows[i]!]! * values[i]!;
+    return sum;
   }
 
   private costOf(column: number): number {
@@ -123,7 +169,7 @@ export class MasterProgram {
     let entering: number | null = null;
     for (let index = 0; index < this.columns.length; index++) {
       if (this.blocked[index]) continue;
-      const cost = this.reducedCost(this.columns[index]!);
+      const cost = this.columns[index]!.cost - this.dot(index, this.duals, 0);
       if (cost < best) {
         best = cost;
         entering = index;
@@ -230,10 +276,8 @@ export class MasterProgram {
     };
     for (let index = 0; index < this.columns.length; index++) {
       if (this.blocked[index]) continue;
-      const { rows, values } = this.columns[index]!;
-      let along = 0;
-      for (let j = 0; j < rows.length; j++) along += inverse[base + rows[j]!]! * values[j]!;
-      if (along < -1e-7) consider(index, along, this.reducedCost(this.columns[index]!));
+      const along = this.dot(index, inverse, base);
+      if (along < -1e-7) consider(index, along, this.columns[index]!.cost - this.dot(index, this.duals, 0));
     }
     for (let row = 0; row < size; row++) {
       const sign = row < this.demands.length ? -1 : 1;
@@ -279,3 +323,9 @@ export class MasterProgram {
 }
 
 const BLOCKED_COST = 4;
+
+function longer<T extends Int32Array | Float64Array | Uint8Array>(array: T): T {
+  const made = new (array.constructor as new (length: number) => T)(2 * array.length);
+  made.set(array);
+  return made;
+}

@@ -65,15 +65,92 @@ describe("plans that can be reckoned by hand", () => {
   });
 });
 
-const published = "../shared/cutting/one-dimensional.json";
+describe("small racks with a least cost that is plain to see", () => {
+  const parts = [{ id: "p", quantity: 2, length: 500, width: 100 }];
 
-describe.skipIf(!existsSync(published))("published one-dimensional instances (sources in that folder's README)", () => {
-  const quick = ["falkenauer-t60_08", "falkenauer-u120_02", "scholl1-N2C2W4_I", "schwerin1-BPP81", "waescher-TEST0044"];
-  const instances: { name: string; optimum: number; problem: ProblemInput }[] = existsSync(published)
-    ? JSON.parse(readFileSync(published, "utf8"))
-    : [];
+  it("takes one long board before two short ones when it is cheaper, and two short ones when they are", () => {
+    const boards = (long: number) => [
+      { id: "long", length: 1003, width: 100, cost: long },
+      { id: "short 1", length: 500, width: 100, cost: 4 },
+      { id: "short 2", length: 500, width: 100, cost: 4 },
+    ];
+    expect(planOf({ kerf: 3, boards: boards(7), parts })).toMatchObject({ status: "optimal", cost: 7 });
+    expect(planOf({ kerf: 3, boards: boards(9), parts })).toMatchObject({ status: "optimal", cost: 8 });
+    expect(planOf({ kerf: 3.01, boards: boards(7), parts })).toMatchObject({ status: "optimal", cost: 8 });
+  });
 
-  it.each(instances.filter(({ name }) => quick.includes(name)))("$name is solved to proof", ({ optimum, problem }) => {
-    expect(planOf(problem)).toMatchObject({ status: "optimal", cost: optimum });
+  it("reckons an offcut's worth and a board's charge", () => {
+    const boards = [{ id: "b", length: 2000, width: 100, cost: 10 }];
+    const rules = { minOffcut: { length: 900, width: 100 }, offcutCredit: 0.5, boardCharge: 1 };
+    expect(planOf({ ...rules, boards, parts }).cost).toBeCloseTo(10 - 0.5 * 5 + 1);
+    expect(planOf({ ...rules, minOffcut: { length: 1001, width: 100 }, boards, parts }).cost).toBeCloseTo(11);
+  });
+
+  it("lays a strip where its ring angles are", () => {
+    const boards = [{ id: "b", length: 600, width: 200, cost: 1, rings: [5, 5, 45, 45] }];
+    const rift = { ...parts[0]!, quantity: 1, rings: { min: 30, max: 60, share: 1 } };
+    const plan = planOf({ boards, parts: [rift] });
+    expect(plan.boards[0]!.pieces[0]!.y).toBe(100);
+  });
+
+  it("turns a piece only when its part allows it", () => {
+    const boards = [{ id: "b", length: 100, width: 500, cost: 1 }];
+    expect(planOf({ boards, parts })).toMatchObject({ status: "short" });
+    expect(planOf({ boards, parts: [{ ...parts[0]!, quantity: 1, rotate: true }] })).toMatchObject({
+      status: "optimal",
+    });
+  });
+
+  it("cuts some boards lengthwise first and others across when that saves one", () => {
+    const boards = ["b1", "b2", "b3"].map((id) => ({ id, length: 100, width: 100, cost: 1 }));
+    const mixed = [
+      { id: "long", quantity: 2, length: 100, width: 50 },
+      { id: "tall", quantity: 2, length: 50, width: 100 },
+    ];
+    expect(planOf({ boards, parts: mixed })).toMatchObject({ status: "optimal", cost: 2 });
   });
 });
+
+interface Published {
+  name: string;
+  optimum?: number;
+  bestTwoStage?: number;
+  problem: ProblemInput;
+}
+
+const folder = "../shared/cutting";
+
+function published(set: string): Published[] {
+  const path = `${folder}/${set}.json`;
+  return existsSync(path) ? JSON.parse(readFileSync(path, "utf8")) : [];
+}
+
+describe.skipIf(!existsSync(folder))(
+  "published instances (sources in that folder's README); all of them: bench:plan",
+  () => {
+    const quick = [
+      "falkenauer-t60_08",
+      "falkenauer-u120_02",
+      "scholl1-N2C2W4_I",
+      "schwerin1-BPP81",
+      "waescher-TEST0044",
+    ];
+
+    it.each(published("one-dimensional").filter(({ name }) => quick.includes(name)))(
+      "$name is solved to proof",
+      ({ optimum, problem }) => {
+        expect(planOf(problem)).toMatchObject({ status: "optimal", cost: optimum });
+      },
+    );
+
+    it.each(published("two-dimensional"))("$name takes no more boards than the best in two stages", (instance) => {
+      const plan = planOf(instance.problem);
+      expect(plan.cost).toBeLessThanOrEqual(instance.bestTwoStage!);
+      expect(plan.unplaced).toEqual([]);
+    });
+
+    it.each(published("rack"))("$name is solved to proof", ({ optimum, problem }) => {
+      expect(planOf(problem)).toMatchObject({ status: "optimal", cost: optimum });
+    });
+  },
+);

@@ -1,5 +1,5 @@
 import { bestChoice, isQuick } from "../knapsack.ts";
-import { type Column, MasterProgram } from "../master-program.ts";
+import { type Column, MasterProgram, type SavedBasis } from "../master-program.ts";
 
 /** Bins all alike, and what has to go in them. Sizes in whole numbers, each once, largest first. */
 export interface BinTask {
@@ -54,6 +54,14 @@ export class BinProgram {
     if (this.known.has(key)) return;
     this.known.add(key);
     this.program.add({ rows: pattern.items, values: pattern.counts, cost: 1 });
+  }
+
+  save(): SavedBasis {
+    return this.program.save();
+  }
+
+  restore(saved: SavedBasis): void {
+    this.program.restore(saved);
   }
 
   /**

@@ -1,3 +1,4 @@
+import { sequence } from "../number-sequence.ts";
 import { type BinPattern, BinProgram, type BinTask } from "./bin-program.ts";
 import { fillLargestFirst, fillLeastSlack } from "./fill-bins.ts";
 
@@ -28,15 +29,25 @@ const STRAYS = [
   { times: 0, depth: 0 },
   { times: 1, depth: 6 },
   { times: 2, depth: 6 },
-  { times: 3, depth: 8 },
-  { times: 4, depth: 12 },
-  { times: 6, depth: 20 },
-  { times: 10, depth: 40 },
 ];
+/** Then dives choose by the program's choice and chance mixed, each time otherwise. */
+const MIXED = { times: 1, depth: 4, chance: 0.5, dives: 3000 };
+/** With so few sizes left, the rest is packed as a task of its own, more thoroughly: dives so free, so many steps in all. */
+const FINISH = {
+  sizes: 45,
+  strays: [
+    { times: 0, depth: 0 },
+    { times: 4, depth: 40 },
+  ],
+  steps: 100,
+};
 
 class Search {
   best: BinPattern[];
   bound = 0;
+  private chance = 0;
+  private readonly random = sequence(1);
+  private steps = Number.POSITIVE_INFINITY;
   private readonly program: BinProgram;
 
   constructor(
@@ -56,10 +67,29 @@ class Search {
     const root = this.program.relax(this.task.demands, Number.POSITIVE_INFINITY, this.mayGoOn);
     if (!root) return;
     this.bound = Math.max(this.bound, root.bound);
+    const saved = this.program.save();
     for (const stray of STRAYS) {
       if (this.done() || !this.mayGoOn()) return;
-      this.dive(this.task.demands, [], stray.times, stray.depth, 0);
+      this.program.restore(saved);
+      this.dive(this.task.demands, [], stray.times, stray.depth);
     }
+    this.chance = MIXED.chance;
+    for (let dive = 0; dive < MIXED.dives && !this.done() && this.mayGoOn(); dive++) {
+      this.program.restore(saved);
+      this.dive(this.task.demands, [], MIXED.times, MIXED.depth);
+    }
+  }
+
+  /** Looks for a packing of no more bins than the goal; a part of another search. */
+  finish(goal: number): BinPattern[] | null {
+    this.bound = goal;
+    this.steps = FINISH.steps;
+    for (const pattern of this.best) this.program.add(pattern);
+    for (const { times, depth } of FINISH.strays) {
+      if (this.done() || !this.mayGoOn() || this.steps <= 0) break;
+      this.dive(this.task.demands, [], times, depth);
+    }
+    return this.done() ? this.best : null;
   }
 
   private done(): boolean {
@@ -72,9 +102,10 @@ class Search {
     this.onBetter?.({ bins, bound: this.bound });
   }
 
-  private dive(left: number[], fixed: BinPattern[], strays: number, depthLeft: number, depth: number): void {
+  private dive(left: number[], fixed: BinPattern[], strays: number, depthLeft: number): void {
     this.offer([...fixed, ...fillLeastSlack(this.task, left)]);
     if (this.done() || !this.mayGoOn()) return;
+    if (this.steps-- <= 0) return;
     const target = this.best.length - 1 - fixed.length;
     const relaxed = this.program.relax(left, target, this.mayGoOn);
     if (!relaxed || relaxed.bound > target) return;
@@ -83,19 +114,42 @@ class Search {
       this.offer([...fixed, ...bins]);
       return;
     }
+    const sizesLeft = rest.filter((count) => count > 0).length;
+    if (this.steps === Number.POSITIVE_INFINITY && sizesLeft <= FINISH.sizes) {
+      const last = finishBins(this.task, rest, target - bins.length, this.mayGoOn);
+      if (last) this.offer([...fixed, ...bins, ...last]);
+      return;
+    }
     const choices = relaxed.used
       .filter(({ amount }) => amount - Math.floor(amount + 1e-6) > 1e-6)
-      .map(({ pattern, amount }) => ({ pattern, part: amount - Math.floor(amount + 1e-6) }))
+      .map(({ pattern, amount }) => ({
+        pattern,
+        part: amount - Math.floor(amount + 1e-6) + this.chance * this.random(),
+      }))
       .sort((a, b) => b.part - a.part || load(this.task, b.pattern) - load(this.task, a.pattern));
     const most = depthLeft > 0 ? strays : 0;
+    const saved = most > 0 ? this.program.save() : null;
     for (let tried = 0; tried <= most && tried < choices.length; tried++) {
       const { pattern } = choices[tried]!;
       const next = take(rest, pattern);
       if (!next) continue;
-      this.dive(next, [...fixed, ...bins, pattern], most - tried, depthLeft - 1, depth + 1);
+      if (saved && tried > 0) this.program.restore(saved);
+      this.dive(next, [...fixed, ...bins, pattern], most - tried, depthLeft - 1);
       if (this.done() || !this.mayGoOn()) return;
     }
   }
+}
+
+/** Packs what is left into no more bins than the goal, or gives up. */
+function finishBins(task: BinTask, left: number[], goal: number, mayGoOn: () => boolean): BinPattern[] | null {
+  const items = left.flatMap((count, item) => (count > 0 ? [item] : []));
+  const sub: BinTask = {
+    capacity: task.capacity,
+    sizes: items.map((item) => task.sizes[item]!),
+    demands: items.map((item) => left[item]!),
+  };
+  const bins = new Search(sub, mayGoOn, undefined).finish(goal);
+  return bins?.map(({ items: own, counts }) => ({ items: own.map((item) => items[item]!), counts })) ?? null;
 }
 
 /** Takes each used pattern as often as its whole part says. */

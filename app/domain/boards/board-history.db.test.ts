@@ -96,7 +96,7 @@ const changes: Record<
   },
   "taken down": { run: (db) => takeDown(db, scene.shop.people.helper, scene.shop.boardId, now) },
   "put back": { run: (db) => putBack(db, scene.shop.people.helper, scene.shop.benchBoardId, 14, now) },
-  marked: { run: (db) => markBoard(db, scene.shop.people.maker, scene.shop.spareBoardId, "lost") },
+  marked: { run: (db) => markBoard(db, scene.shop.people.maker, scene.shop.spareBoardId, "lost", now) },
   deleted: { run: (db) => deleteBoard(db, scene.shop.people.owner, scene.shop.spareBoardId) },
   "offcut made": {
     run: (db) => {

@@ -71,7 +71,7 @@ async function heldRefusal(db: Knex, actor: Actor, request: HoldRequest, lengthM
 }
 
 /** Ends the holds of a board whose time has passed. The caller holds the board's lock. */
-async function lapseHolds(trx: Knex, actor: Actor, boardId: string, now: Date): Promise<void> {
+export async function lapseHolds(trx: Knex, actor: Actor, boardId: string, now: Date): Promise<void> {
   const late = (await listHoldsOfBoard(trx, actor, boardId, ["held"])).filter((hold) => hold.expiresAt <= now);
   await endHolds(
     trx,

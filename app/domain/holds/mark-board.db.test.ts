@@ -29,7 +29,7 @@ describe("marking what became of a board", () => {
 
   test("used up, its holds are used with it, and history says so", async () => {
     const { maker, board } = await scene(true);
-    expect(await markBoard(db(), maker, board.id, "used")).toEqual({ ok: true });
+    expect(await markBoard(db(), maker, board.id, "used", now)).toEqual({ ok: true });
     expect(await stateOf(board.id)).toBe("used");
     expect(await db()("holds").where({ board_id: board.id }).pluck("state")).toEqual(["used"]);
     expect(await db()("hold_spans").where({ board_id: board.id })).toEqual([]);
@@ -38,21 +38,29 @@ describe("marking what became of a board", () => {
 
   test.each(["sold", "lost"] as const)("spoken for, it is not %s: somebody counts on it", async (to) => {
     const { maker, board } = await scene(true);
-    expect(await markBoard(db(), maker, board.id, to)).toEqual({ ok: false, why: "held" });
+    expect(await markBoard(db(), maker, board.id, to, now)).toEqual({ ok: false, why: "held" });
     expect(await stateOf(board.id)).toBe("racked");
+  });
+
+  test("a hold whose time has passed holds nothing up: it lapses", async () => {
+    const { maker, board } = await scene(true);
+    const later = new Date(now.getTime() + 2e9);
+    expect(await markBoard(db(), maker, board.id, "sold", later)).toEqual({ ok: true });
+    expect(await db()("holds").where({ board_id: board.id }).pluck("state")).toEqual(["lapsed"]);
+    expect(await db()("board_events").where({ board_id: board.id }).pluck("kind")).toContain("lapsed");
   });
 
   test("lost and found again, it is racked; twice over is refused", async () => {
     const { maker, board } = await scene();
-    expect(await markBoard(db(), maker, board.id, "lost")).toEqual({ ok: true });
-    expect(await markBoard(db(), maker, board.id, "sold")).toEqual({ ok: false, why: "state", state: "lost" });
-    expect(await markBoard(db(), maker, board.id, "racked")).toEqual({ ok: true });
-    expect(await markBoard(db(), maker, board.id, "racked")).toEqual({ ok: false, why: "state", state: "racked" });
+    expect(await markBoard(db(), maker, board.id, "lost", now)).toEqual({ ok: true });
+    expect(await markBoard(db(), maker, board.id, "sold", now)).toEqual({ ok: false, why: "state", state: "lost" });
+    expect(await markBoard(db(), maker, board.id, "racked", now)).toEqual({ ok: true });
+    expect(await markBoard(db(), maker, board.id, "racked", now)).toEqual({ ok: false, why: "state", state: "racked" });
   });
 
   test("a stranger's board is not there", async () => {
     const { board } = await scene();
-    expect(await markBoard(db(), await anActor(db(), "owner"), board.id, "lost")).toEqual({
+    expect(await markBoard(db(), await anActor(db(), "owner"), board.id, "lost", now)).toEqual({
       ok: false,
       why: "missing",
     });

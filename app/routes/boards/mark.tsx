@@ -7,6 +7,7 @@ import { getBoard } from "#app/domain/boards/boards.sql.server.ts";
 import { type MarkableState, markableStates, markBoard } from "#app/domain/holds/mark-board.server.ts";
 import { dbContext } from "#app/server/context.server.ts";
 import { notHere, requireForm, requireFound, requireRole } from "#app/server/guards.server.ts";
+import { systemClock } from "#app/services/clock.server.ts";
 import type { Route } from "./+types/mark.ts";
 
 export { revalidateOnConflict as shouldRevalidate } from "#app/components/revalidate-on-conflict.ts";
@@ -30,7 +31,7 @@ export async function loader({ params, context }: Route.LoaderArgs) {
 export async function action({ params, request, context }: Route.ActionArgs) {
   const { actor } = requireRole(context, "board:correct");
   const { to } = await requireForm(request, form);
-  const marked = await markBoard(context.get(dbContext), actor, params.boardId, to);
+  const marked = await markBoard(context.get(dbContext), actor, params.boardId, to, systemClock.now());
   if (!marked.ok && marked.why === "missing") notHere();
   if (marked.ok) return redirect(href("/boards/:boardId", { boardId: params.boardId }));
   const why =

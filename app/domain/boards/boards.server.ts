@@ -1,4 +1,5 @@
 import type { Knex } from "knex";
+import { fitHolds } from "#app/domain/holds/fit-holds.server.ts";
 import type { Actor } from "#app/domain/shop/actor.ts";
 import { withTransaction } from "#app/services/db.server.ts";
 import type { BoardSummary } from "./board.ts";
@@ -14,6 +15,13 @@ export interface StaleRefusal {
   why: "changed";
   byName: string | null;
   at: Date | null;
+}
+
+/** A board that would be too short for what is held of it: for which projects. */
+export interface TooShortRefusal {
+  ok: false;
+  why: "too short";
+  projects: string[];
 }
 
 export type ChangeResult = { ok: true } | { ok: false; why: "missing" } | StaleRefusal;
@@ -42,7 +50,7 @@ const columns: Record<keyof BoardCorrection, { column: string; words: string }> 
 
 /**
  * Corrects fields of a board: one transaction with its history line. A form made from an older version of the record is refused, never merged
- * over what somebody else wrote.
+ * over what somebody else wrote. Live holds follow a corrected length; one that would have nothing left refuses it.
  *
  * @param version of the record the form was made from.
  */
@@ -52,7 +60,7 @@ export async function correctBoard(
   boardId: string,
   version: number,
   correction: Partial<BoardCorrection>,
-): Promise<ChangeResult> {
+): Promise<ChangeResult | TooShortRefusal> {
   return withTransaction(db, async (trx) => {
     const locked = await lockBoard(trx, actor, boardId);
     if (!locked) return { ok: false, why: "missing" };
@@ -71,6 +79,11 @@ export async function correctBoard(
     }
     if (Object.keys(update).length === 0) return { ok: true };
     const after = { ...before, ...correction };
+    if (after.lengthMm !== before.lengthMm) {
+      const length = { beforeMm: before.lengthMm, afterMm: after.lengthMm };
+      const projects = await fitHolds(trx, actor, boardId, length);
+      if (projects.length > 0) return { ok: false, why: "too short", projects };
+    }
     await trx("boards")
       .where({ id: boardId, shop_id: actor.shopId })
       .update({ ...update, search_text: searchText(after), version: trx.raw("version + 1") });

@@ -108,6 +108,20 @@ export async function updateHold(
   await trx("holds").where({ id: holdId, shop_id: actor.shopId }).update(change);
 }
 
+/** Moves the far end of a live hold, and of its claim. @throws the database's duplicate-key error where another claim begins before that. */
+export async function moveEnd(
+  trx: Knex,
+  actor: Pick<Actor, "shopId">,
+  hold: Pick<HoldRow, "id" | "boardId">,
+  toMm: number,
+): Promise<void> {
+  await trx("holds").where({ id: hold.id, shop_id: actor.shopId }).update({ to_mm: toMm });
+  await trx("hold_spans")
+    .where({ hold_id: hold.id, board_id: hold.boardId })
+    .update({ ends: moment(trx, toMm) });
+  await touchClaims(trx, actor, hold.boardId);
+}
+
 async function touchClaims(trx: Knex, actor: Pick<Actor, "shopId">, boardId: string): Promise<void> {
   await trx("boards")
     .where({ id: boardId, shop_id: actor.shopId })

@@ -13,6 +13,7 @@ import {
 import { correctBoard } from "#app/domain/boards/boards.server.ts";
 import { getBoard } from "#app/domain/boards/boards.sql.server.ts";
 import { CorrectionFields, correctionDefaults } from "#app/domain/boards/correction-fields.tsx";
+import { useRecordAsOpened } from "#app/domain/boards/use-record-as-opened.ts";
 import { useShop } from "#app/domain/shop/shop-view.tsx";
 import { dbContext } from "#app/server/context.server.ts";
 import { formVersion, notHere, requireFound, requireRole } from "#app/server/guards.server.ts";
@@ -48,32 +49,42 @@ export async function action({ params, request, context }: Route.ActionArgs) {
   const version = formVersion(formData);
   const result = await correctBoard(context.get(dbContext), actor, params.boardId, version, submission.value);
   if (!result.ok && result.why === "missing") notHere();
+  if (!result.ok && result.why === "too short") {
+    const lengthMm = [`Held beyond that for ${result.projects.join(", ")}: let it go first.`];
+    return data({ result: submission.reply({ fieldErrors: { lengthMm } }), stale: null }, { status: 409 });
+  }
   if (!result.ok)
     return data({ result: submission.reply(), stale: { byName: result.byName, at: result.at } }, { status: 409 });
   return redirect(href("/boards/:boardId", { boardId: params.boardId }));
 }
 
 export default function CorrectBoard({ loaderData, actionData }: Route.ComponentProps) {
+  return <Correction key={loaderData.group} {...{ loaderData, actionData }} />;
+}
+
+function Correction({ loaderData, actionData }: Pick<Route.ComponentProps, "loaderData" | "actionData">) {
   const { board, group } = loaderData;
   const shop = useShop();
+  const defaults = correctionDefaults(group, board, shop);
   const [form, fields] = useForm<Record<string, string>>({
     id: `correct-${group}`,
     lastResult: actionData?.result,
-    defaultValue: correctionDefaults(group, board, shop),
+    defaultValue: defaults,
     onValidate: ({ formData }) => parseWithZod(formData, { schema: correctionSchema(group, shop) }) as never,
     shouldRevalidate: "onInput",
   });
   const stale = actionData?.stale;
+  const version = useRecordAsOpened({ formId: form.id, version: board.version, defaults, stale });
   return (
     <Panel title={titles[group]} closeTo={href("/boards/:boardId", { boardId: board.id })}>
       {stale ? (
         <Notice kind="wrong" title="This board changed while you wrote" className="mb-4">
           {stale.byName ?? "Somebody"} changed it{stale.at ? ` on ${printDay(stale.at)}` : ""}. What you typed is still
-          here: compare it with the page below, then save again.
+          here, and the rest is as it is now: look at both, then save again.
         </Notice>
       ) : null}
       <Form method="post" {...getFormProps(form)} className="grid gap-4">
-        <input type="hidden" name="version" value={board.version} />
+        <input type="hidden" name="version" value={version} />
         <CorrectionFields group={group} fields={fields} />
         <Button look="main" className="w-full sm:w-auto sm:justify-self-start">
           Save

@@ -130,15 +130,19 @@ function BoardActions({ board, mayReserve }: BoardActionsProps) {
         </ButtonLink>
       ) : null}
       <div className="grid grid-cols-3 gap-2 md:flex">
-        <ButtonLink className="px-2 md:px-4" to={href("/boards/:boardId/moisture", at) + toPanel}>
+        <ButtonLink className="px-2! md:px-4!" to={href("/boards/:boardId/moisture", at) + toPanel}>
           Moisture
         </ButtonLink>
-        <ButtonLink className="px-2 md:px-4" to={href("/boards/:boardId/move", at) + toPanel}>
+        <ButtonLink className="px-2! md:px-4!" to={href("/boards/:boardId/move", at) + toPanel}>
           Move
         </ButtonLink>
         {racked || board.state === "out" ? (
           <Form method="post" action={href("/boards/:boardId/state", at)} className="grid">
-            <Button className="whitespace-nowrap px-2" name="intent" value={racked ? "take down" : "put back"}>
+            <Button
+              className="whitespace-nowrap px-2! md:px-4!"
+              name="intent"
+              value={racked ? "take down" : "put back"}
+            >
               {racked ? "Take down" : "Put back"}
             </Button>
           </Form>

@@ -11,6 +11,9 @@ const posts = Object.entries(asked)
 /** What no page of ours sends: nothing, too much, other numbers, other writing, what a database or a program might take for something else. */
 const odd = ["", "☃", "-1", "1e309", "NaN", "\0", "x".repeat(5000), "9".repeat(40), "__proto__", "{}", "[]", "null"];
 
+/** Those of them that are tried on each field alone. */
+const oddest = ["", "☃", "-1", "1e309", "9".repeat(40), "[]"];
+
 /** Nonsense is answered in words, never by an error. The test app throws whatever would have been an error page. */
 function expectAnswered(status: number, what: unknown): void {
   expect({ what, isAnswered: status < 500 }).toEqual({ what, isAnswered: true });
@@ -38,9 +41,10 @@ describe("nonsense in a form", () => {
     for (const value of odd) {
       const all = Object.fromEntries(Object.keys(sent).map((name) => [name, value]));
       expectAnswered((await app.post(path, cookies.owner, all)).status, ["everything", value]);
+    }
+    for (const value of oddest)
       for (const name of Object.keys(sent))
         expectAnswered((await app.post(path, cookies.owner, { ...sent, [name]: value })).status, [name, value]);
-    }
   });
 });
 

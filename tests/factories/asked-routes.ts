@@ -1,3 +1,4 @@
+import { calculators } from "#app/domain/calculators/calculators.ts";
 import type { Permission } from "#app/domain/shop/permissions.ts";
 import type { FurnishedShop } from "./furnished-shop.ts";
 
@@ -245,10 +246,11 @@ export const asked: Record<string, AskedRoute> = {
     form: (shop) => ({ stretches: JSON.stringify([{ boardId: shop.spareBoardId, fromMm: 0, toMm: 500 }]) }),
   },
   "routes/projects/take-down.tsx": { at: (shop) => `/projects/${shop.projectId}/take-down`, get: "board:take-down" },
+  "routes/calculators/list.tsx": { at: () => "/calculators", get: "board:see" },
   ...Object.fromEntries(
-    ["list", "measure", "claim", "air", "meter", "rings", "leg", "ready", "movement", "weight"].map((name) => [
-      `routes/calculators/${name}.tsx`,
-      { at: () => `/calculators${name === "list" ? "" : `/${name}`}`, get: "board:see" } satisfies AskedRoute,
+    Object.values(calculators).map(({ path }) => [
+      `routes${path}.tsx`,
+      { at: () => path, get: "board:see" } satisfies AskedRoute,
     ]),
   ),
   "routes/files/boards-csv.ts": { at: () => "/files/boards.csv?state=any", get: "board:see" },

@@ -2,7 +2,7 @@ import { calculators } from "#app/domain/calculators/calculators.ts";
 import type { Permission } from "#app/domain/shop/permissions.ts";
 import type { FurnishedShop } from "./furnished-shop.ts";
 
-export type Sent = Record<string, string> | { json: unknown };
+type Sent = Record<string, string> | { json: unknown };
 
 /** How one route is asked, and who may. */
 export interface AskedRoute {

@@ -2,7 +2,7 @@ import { deflateSync } from "node:zlib";
 import sharp, { type Sharp } from "sharp";
 
 export const pictureFormats = ["jpeg", "png", "webp", "avif"] as const;
-export type PictureFormat = (typeof pictureFormats)[number];
+type PictureFormat = (typeof pictureFormats)[number];
 
 /** A word that stands in a picture's hidden notes, beside the place it was taken. */
 export const hiddenWord = "Quarry Lane";

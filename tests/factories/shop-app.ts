@@ -18,7 +18,7 @@ import type { RingReader } from "#app/services/ring-reader.server.ts";
 import type { Storage } from "#app/services/storage.server.ts";
 
 /** What a route file exports. */
-export type RouteModule = Record<"loader" | "action" | "default" | "middleware", unknown>;
+type RouteModule = Record<"loader" | "action" | "default" | "middleware", unknown>;
 
 const modules = import.meta.glob<RouteModule>(["/app/routes/**/*.{ts,tsx}", "!**/*.{test,fixture}.ts"]);
 

@@ -25,15 +25,25 @@ const broken = {
   text: "What you did may not have been kept. Try once more; if it stays broken, tell the shop's owner what you were doing.",
 };
 
+const unreachable = {
+  title: "No answer from the shop",
+  text: "The connection is gone, or very slow. What was sent last may not have arrived: once the connection is back, open the page again and look.",
+};
+
+/** A browser's own error for a request that got no answer; none of ours has this type and these words. */
+function isUnanswered(error: unknown): boolean {
+  return error instanceof TypeError && /fetch|network|load failed/i.test(error.message);
+}
+
 /** What a person sees instead of a page: what happened, in words, and a way on. Status texts of the server are never shown. */
 export function ErrorPage({ error }: { error: unknown }) {
   const status = isRouteErrorResponse(error) ? error.status : 500;
-  const { title, text } = words[status] ?? broken;
+  const { title, text } = isUnanswered(error) ? unreachable : (words[status] ?? broken);
   return (
     <main className="page grid min-h-[70vh] content-center justify-items-center gap-4 text-center">
       <title>{`${title} · Rayfleck`}</title>
       <BlankEnd />
-      <p className="font-mono text-ink-soft text-sm">{status}</p>
+      {isUnanswered(error) ? null : <p className="font-mono text-ink-soft text-sm">{status}</p>}
       <h1 className="text-3xl">{title}</h1>
       <p className="max-w-prose text-ink-soft">{text}</p>
       <div className="flex flex-wrap justify-center gap-3">

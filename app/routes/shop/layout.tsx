@@ -1,6 +1,7 @@
 import { Outlet } from "react-router";
 import { ErrorPage } from "#app/components/error-page.tsx";
 import { ShopHeader } from "#app/components/shop-header.tsx";
+import { Unsent } from "#app/components/unsent.tsx";
 import { FindBoard } from "#app/domain/boards/find-board.tsx";
 import { can } from "#app/domain/shop/permissions.ts";
 import { ShopViewProvider } from "#app/domain/shop/shop-view.tsx";
@@ -43,6 +44,7 @@ export default function ShopLayout({ loaderData }: Route.ComponentProps) {
       <main id="content" tabIndex={-1} className="page outline-none">
         <Outlet />
       </main>
+      <Unsent />
     </ShopViewProvider>
   );
 }

@@ -61,6 +61,7 @@ export interface GridSize {
 }
 
 export const PLAN_GRID: GridSize = { x: 400, y: 160 };
+export const PROMISE_GRID: GridSize = { x: 160, y: 90 };
 export const VALUE_GRID: GridSize = { x: 900, y: 250 };
 export const BOUND_GRID: GridSize = { x: 6000, y: 1500 };
 

@@ -1,5 +1,5 @@
-import type { Carver } from "./carve.ts";
-import type { Pattern } from "./pattern.ts";
+import { type Carver, isPlain } from "./carve.ts";
+import { type Pattern, patternOf } from "./pattern.ts";
 import type { BoardPricer } from "./price-boards.ts";
 import type { Solution } from "./solution.ts";
 import type { Stock, Task } from "./task.ts";
@@ -40,16 +40,32 @@ export function greedyPlan(
   let cost = 0;
   while (demand.some((count) => count > 0)) {
     if (!keepOn(cost, demand)) return null;
-    const pattern = bestForCost({ task, carver, pricer, stocks }, values, demand, boards, trials, () =>
+    const chosen = bestForCost({ task, carver, pricer, stocks }, values, demand, boards, trials, () =>
       keepOn(cost, demand),
     );
-    if (!pattern) break;
+    if (!chosen) break;
+    const pattern = onCheapest(task, chosen, boards);
     patterns.push(pattern);
     cost += pattern.cost;
     boards[pattern.stock]!--;
     for (const [kind, count] of pattern.counts) demand[kind]! -= count;
   }
   return { patterns, missing: demand };
+}
+
+/** The same layout on the cheapest board on which it fits as it is, where places are alike. */
+function onCheapest(task: Task, pattern: Pattern, boards: number[]): Pattern {
+  const own = task.stocks[pattern.stock]!;
+  if (!isPlain(task, own)) return pattern;
+  let best = pattern;
+  for (const stock of task.stocks) {
+    if (stock.cost >= best.cost + (own.credit > 0 ? own.cost : 0) || boards[stock.index]! <= 0) continue;
+    if (stock.length < pattern.reach.length || stock.width < pattern.reach.width) continue;
+    if (!pattern.counts.every(([kind]) => stock.eligible[kind]) || !isPlain(task, stock)) continue;
+    const moved = patternOf(task, stock, pattern.block);
+    if (moved.cost < best.cost - 1e-9) best = moved;
+  }
+  return best;
 }
 
 /** The pattern that gives most worth for its cost, of the boards that promise most. */

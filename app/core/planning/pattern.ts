@@ -9,6 +9,8 @@ export interface Pattern {
   counts: [kind: number, count: number][];
   /** Cost of the board less what its offcuts are worth. */
   cost: number;
+  /** How far the pieces reach along and across the board. */
+  reach: { length: number; width: number };
 }
 
 /** Works out what a block costs and gives on a board. */
@@ -18,5 +20,9 @@ export function patternOf(task: Task, stock: Stock, block: Block): Pattern {
   const counts = new Map<number, number>();
   for (const { kind } of pieces) counts.set(kind, (counts.get(kind) ?? 0) + 1);
   const back = stock.credit * offcuts.reduce((sum, offcut) => sum + offcut.length * offcut.width, 0);
-  return { stock: stock.index, block, counts: [...counts].sort((a, b) => a[0] - b[0]), cost: stock.cost - back };
+  const reach = {
+    length: pieces.reduce((most, piece) => Math.max(most, piece.x + piece.length), 0),
+    width: pieces.reduce((most, piece) => Math.max(most, piece.y + piece.width), 0),
+  };
+  return { stock: stock.index, block, counts: [...counts].sort((a, b) => a[0] - b[0]), cost: stock.cost - back, reach };
 }

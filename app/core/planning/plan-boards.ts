@@ -1,8 +1,9 @@
-import { BOUND_GRID, type Grid, makeGrid, PLAN_GRID, VALUE_GRID } from "./axes.ts";
+import { BOUND_GRID, type Grid, makeGrid, PLAN_GRID, PROMISE_GRID, VALUE_GRID } from "./axes.ts";
 import { Carver } from "./carve.ts";
 import { areaBound, nextPossibleCost } from "./cost-bound.ts";
 import { everything, type GreedyTools, greedyPlan } from "./greedy-plan.ts";
 import { improvePlan } from "./improve-plan.ts";
+import { sequence } from "./number-sequence.ts";
 import { PieceValues } from "./piece-values.ts";
 import { BoardPricer, boundByPrices } from "./price-boards.ts";
 import { costOf, isBetter, type Solution } from "./solution.ts";
@@ -15,10 +16,26 @@ export interface SearchWatch {
 
 /** Stocks that values and plans are made from: the most promising of all, and of each class of cost. Bounds look at all. */
 const CANDIDATES = { best: 110, classes: 12, ofEachClass: 6 };
+const GREEDY_PLANS = 10;
+/** The pattern program is asked for tasks of so many kinds times boards, no larger. */
+const MOST_VALUED = 3000;
 const ROUNDS = 24;
 const PATTERNS_A_ROUND = 100;
-const TRIALS = 8;
-const PATIENCE = 400;
+const TRIALS = 12;
+/** Tries in a row without gain before the search ends, for each piece of the task, and the least and most of them. */
+const PATIENCE = { each: 4, least: 60, most: 2000 };
+
+/** Greedy plans are made with large pieces, and wide ones, worth more than their area by these powers: then they are not left to the last. */
+const LEANINGS = [
+  { area: 0, width: 0 },
+  { area: 0.02, width: 0.03 },
+  { area: 0.04, width: 0.03 },
+  { area: 0.04, width: 0 },
+  { area: 0.09, width: 0 },
+  { area: 0.16, width: 0.03 },
+  { area: 0.06, width: 0.02 },
+  { area: 0.12, width: 0 },
+];
 
 /**
  * Plans any rack: values of pieces from the pattern program, greedy plans by these values, and then repeated replanning of a
@@ -64,20 +81,32 @@ class BoardSearch {
     const tools: GreedyTools = {
       task,
       carver,
-      pricer: new BoardPricer(task, grid, carver, candidates),
+      pricer: new BoardPricer(task, makeGrid(task, PROMISE_GRID), carver, candidates),
       stocks: candidates,
     };
-    this.tryGreedy(tools, start);
     this.raiseBy(start);
+    const random = sequence(2);
+    for (let i = 0; i < GREEDY_PLANS; i++) {
+      if (this.done() || !watch.mayGoOn()) break;
+      const leaning = LEANINGS[i] ?? { area: 0.12 * random(), width: 0.05 * random() };
+      this.tryGreedy(tools, lean(task, start, leaning));
+    }
     let values = start;
-    if (!this.done() && watch.mayGoOn()) values = this.findValues(candidates, start, tools);
+    if (task.kinds.length * candidates.length <= MOST_VALUED && !this.done() && watch.mayGoOn())
+      values = this.findValues(candidates, start, tools);
     if (this.done() || !watch.mayGoOn()) return;
-    this.best = improvePlan({ task, carver, grid, stocks: candidates }, this.best, values, {
-      mayGoOn: watch.mayGoOn,
-      goal: this.bound,
-      patience: PATIENCE,
-      onBetter: (solution) => this.report(solution),
-    });
+    const pieces = this.demand.reduce((sum, count) => sum + count, 0);
+    this.best = improvePlan(
+      { task, carver, grid: makeGrid(task, PROMISE_GRID), stocks: candidates },
+      this.best,
+      values,
+      {
+        mayGoOn: watch.mayGoOn,
+        goal: this.bound,
+        patience: Math.min(PATIENCE.most, Math.max(PATIENCE.least, PATIENCE.each * pieces)),
+        onBetter: (solution) => this.report(solution),
+      },
+    );
   }
 
   private findValues(candidates: Stock[], start: number[], tools: GreedyTools): number[] {
@@ -142,4 +171,12 @@ function valuesByArea(task: Task, worth: number): number[] {
   const gross = task.kinds.map(({ poses }) => (poses[0]!.length + kerf) * (poses[0]!.width + kerf));
   const needed = task.kinds.reduce((sum, kind) => sum + kind.demand * gross[kind.index]!, 0);
   return gross.map((size) => (size * Math.max(worth, 1e-9)) / needed);
+}
+
+/** Values with another leaning, all pieces together worth the same. */
+function lean(task: Task, values: number[], { area, width }: { area: number; width: number }): number[] {
+  const leaning = values.map((value, kind) => value ** (1 + area) * task.kinds[kind]!.poses[0]!.width ** width);
+  const total = (of: number[]) => of.reduce((sum, value, kind) => sum + value * task.kinds[kind]!.demand, 0);
+  const scale = total(values) / total(leaning);
+  return leaning.map((value) => value * scale);
 }

@@ -1,5 +1,5 @@
 import { BOUND_GRID, type Grid, makeGrid, PLAN_GRID, PROMISE_GRID, VALUE_GRID } from "./axes.ts";
-import { Carver } from "./carve.ts";
+import { Carver, isPlain } from "./carve.ts";
 import { areaBound, nextPossibleCost } from "./cost-bound.ts";
 import { everything, type GreedyTools, greedyPlan } from "./greedy-plan.ts";
 import { improvePlan } from "./improve-plan.ts";
@@ -22,6 +22,8 @@ const MOST_VALUED = 3000;
 const ROUNDS = 24;
 const PATTERNS_A_ROUND = 100;
 const TRIALS = 12;
+/** Boards where places differ take long to carve. */
+const PLACED_TRIALS = { fewKinds: 12, manyKinds: 2, many: 100 };
 /** Tries in a row without gain before the search ends, for each piece of the task, and the least and most of them. */
 const PATIENCE = { each: 4, least: 60, most: 2000 };
 
@@ -125,10 +127,15 @@ class BoardSearch {
   }
 
   private tryGreedy(tools: GreedyTools, values: number[]): void {
-    const found = greedyPlan(tools, values, everything(this.task), TRIALS, this.watch.mayGoOn);
+    const found = greedyPlan(tools, values, everything(this.task), this.trials(), this.watch.mayGoOn);
     if (!found || !isBetter(this.task, found, this.best)) return;
     this.best = found;
     this.report(found);
+  }
+
+  private trials(): number {
+    if (this.task.stocks.every((stock) => isPlain(this.task, stock))) return TRIALS;
+    return this.task.kinds.length > PLACED_TRIALS.many ? PLACED_TRIALS.manyKinds : PLACED_TRIALS.fewKinds;
   }
 
   private chooseCandidates(promise: (stock: Stock) => number): Stock[] {

@@ -5,7 +5,7 @@ import { cautionsFor } from "./cautions.ts";
 import { clampsFor, glueGrams, newtonsFromLbf } from "./clamps.ts";
 import { millingSheet, roughLengths } from "./milling.ts";
 import { planerPasses, resawing } from "./passes.ts";
-import { glueLines, pliesNeeded } from "./plies.ts";
+import { glueLines, pliesNeeded, plyAlternatives } from "./plies.ts";
 import { bendingLeftPct, combinedSlope, d245BendingPct, hankinson, slopeDeg } from "./slope-of-grain.ts";
 
 const inch = 25.4;
@@ -27,6 +27,18 @@ describe("plies and glue lines", () => {
       (pliesNeeded({ finishedMm: 2.4 * inch, stockMm: 0.8125 * inch, jointPerFaceMm: 0, allowanceMm: 0 })?.gluedMm ??
         0) / inch,
     ).toBeCloseTo(2.4375, 9);
+  });
+
+  test("of several stocks the one that wastes least comes first, then the fewer plies, and one that cannot is left out", () => {
+    const blank = { finishedMm: 1.5 * inch, jointPerFaceMm: inch / 16, allowanceMm: inch / 4 };
+    const found = plyAlternatives(blank, [inch, 2 * inch, 1.75 * inch, 0.125 * inch]);
+    expect(found.map(({ stockMm, plan }) => [stockMm / inch, plan.plies])).toEqual([
+      [1.75, 1],
+      [2, 1],
+      [1, 2],
+    ]);
+    expect((found[2]?.plan.lostAtGlueFacesMm ?? 0) / inch).toBeCloseTo(1 / 8, 9);
+    expect(found[1]?.plan.lostAtGlueFacesMm).toBe(0);
   });
 
   test("taking all of it from one side leaves the glue line off the middle by half of what was taken", () => {
@@ -117,6 +129,19 @@ describe("milling steps", () => {
     expect(sheet?.steps.at(-1)?.size).toEqual({ lengthMm: 42 * inch, widthMm: 3.625 * inch, thicknessMm: 1.5 * inch });
   });
 
+  test("of three plies only the inner one is jointed on both faces", () => {
+    const allow = { lengthMm: inch, widthMm: inch / 4, thicknessMm: inch / 4, jointPerFaceMm: inch / 16 };
+    const steps =
+      millingSheet({ lengthMm: 700, widthMm: 60, thicknessMm: 2.5 * inch }, inch, allow)?.steps.map(
+        ({ step, pieces, size }) => [step, pieces, size.thicknessMm / inch],
+      ) ?? [];
+    expect(steps.slice(2, 5)).toEqual([
+      ["joint a face", 3, 0.9375],
+      ["joint the inner plies' other face", 1, 0.875],
+      ["glue up", 1, 2.75],
+    ]);
+  });
+
   test("no step makes a piece larger, but the glue-up its thickness", () => {
     const size = fc.record({
       lengthMm: fc.integer({ min: 100, max: 2000 }),
@@ -182,6 +207,19 @@ describe("clamps and glue", () => {
     );
   });
 
+  test("a batch stays as long as its slowest blank", () => {
+    const needs = [
+      { id: "a", clamps: 4, clampMinutes: 90 },
+      { id: "b", clamps: 4 },
+      { id: "c", clamps: 4 },
+    ];
+    const { batches } = glueBatches(needs, 8, 45);
+    expect(batches.map(({ ids, outMinute }) => [ids.join(), outMinute])).toEqual([
+      ["a,b", 90],
+      ["c", 135],
+    ]);
+  });
+
   test("the second batch goes in when the first comes out", () => {
     const { batches } = glueBatches(
       [
@@ -244,7 +282,26 @@ describe("cautions", () => {
       gluing: { temperatureC: 4, moisturesPct: [6, 9] },
     });
     expect(all.length).toBeGreaterThan(9);
-    for (const caution of all) expect(caution.words.length * caution.source.length).toBeGreaterThan(0);
+    for (const caution of all) {
+      expect(caution.words.length * caution.source.length).toBeGreaterThan(0);
+      expect(["confirmed", "confirmed-secondary", "memory", "practice"]).toContain(caution.confidence);
+    }
+  });
+
+  test("taller than two passes reach is no table saw's work, and a narrow rip asks for a push stick", () => {
+    const ids = (rip: { heightMm: number; bladeHeightMm: number; fenceGapMm?: number }) =>
+      cautionsFor({ rip }).map(({ id }) => id);
+    expect(ids({ heightMm: 7 * inch, bladeHeightMm: 3.125 * inch })).toEqual(["rip-too-tall"]);
+    expect(ids({ heightMm: inch, bladeHeightMm: 3.125 * inch, fenceGapMm: 2 * inch })).toEqual(["rip-narrow"]);
+  });
+
+  test.each([
+    { liftKg: Number.NaN },
+    { armLoadShare: -1 },
+    { piece: { lengthMm: Number.NaN, widthMm: 40, thicknessMm: 20 } },
+    { gluing: { moisturesPct: [8, Number.NaN] } },
+  ])("a figure that is none is refused, and hides no caution: %j", (situation) => {
+    expect(() => cautionsFor(situation)).toThrow(RangeError);
   });
 
   test("an ordinary piece raises none", () => {

@@ -19,6 +19,7 @@ export interface MillingStep {
   step:
     | "rough length"
     | "joint a face"
+    | "joint the inner plies' other face"
     | "rip to rough width"
     | "glue up"
     | "joint face and edge"
@@ -73,7 +74,11 @@ export function millingSheet(finished: Size, stockMm: number, allow: MillingAllo
   const steps = [
     step("rough length", plies.plies, stockMm),
     step("rip to rough width", plies.plies, stockMm),
-    ...(glued ? [step("joint a face", plies.plies, plies.outerPlyMm), step("glue up", 1, plies.gluedMm)] : []),
+    ...(glued ? [step("joint a face", plies.plies, plies.outerPlyMm)] : []),
+    ...(plies.innerPlyMm === null
+      ? []
+      : [step("joint the inner plies' other face", plies.plies - 2, plies.innerPlyMm)]),
+    ...(glued ? [step("glue up", 1, plies.gluedMm)] : []),
     step("joint face and edge", 1, finished.thicknessMm + plies.toTakeOffMm / 2, jointedMm),
     step("plane to thickness", 1, finished.thicknessMm, jointedMm),
     step("rip and plane to width", 1, finished.thicknessMm, finished.widthMm),

@@ -18,6 +18,8 @@ export interface PlyPlan {
   /** Each outer ply has one glue face, each inner one two. */
   outerPlyMm: number;
   innerPlyMm: number | null;
+  /** What all glue faces together lose to the jointer. */
+  lostAtGlueFacesMm: number;
   /** What is left to take off the blank in all. */
   toTakeOffMm: number;
   /** Share of the stock's thickness that ends in the part, 0 to 1. */
@@ -46,11 +48,29 @@ export function pliesNeeded({ finishedMm, stockMm, jointPerFaceMm, allowanceMm }
       gluedMm,
       outerPlyMm: stockMm - (plies > 1 ? jointPerFaceMm : 0),
       innerPlyMm: plies > 2 ? stockMm - 2 * jointPerFaceMm : null,
+      lostAtGlueFacesMm: 2 * (plies - 1) * jointPerFaceMm,
       toTakeOffMm: gluedMm - finishedMm,
       yield: finishedMm / (plies * stockMm),
     };
   }
   return null;
+}
+
+/**
+ * The same question over several stocks, the one that ends most of its thickness in the part first. A stock that cannot make it is left out.
+ *
+ * @throws RangeError for a size that is none.
+ */
+export function plyAlternatives(
+  question: Omit<PlyQuestion, "stockMm">,
+  stocksMm: readonly number[],
+): { stockMm: number; plan: PlyPlan }[] {
+  return stocksMm
+    .flatMap((stockMm) => {
+      const plan = pliesNeeded({ ...question, stockMm });
+      return plan ? [{ stockMm, plan }] : [];
+    })
+    .sort((a, b) => b.plan.yield - a.plan.yield || a.plan.plies - b.plan.plies);
 }
 
 export interface GlueLine {

@@ -1,51 +1,72 @@
-/** A rectangle on a board's face: from the near end and the left edge. Millimetres. */
-export interface FaceArea {
-  alongMm: number;
-  acrossMm: number;
-  lengthMm: number;
-  widthMm: number;
-}
+import { requireSize, requireWithin } from "#app/core/moisture/accepted-range.ts";
+import { areaOf, coveredArea, emptyRectangles, type FaceArea, type LeastCutting } from "./empty-rectangles.ts";
+import { searchSplits } from "./split-search.ts";
 
-/** The least a cutting may measure; one of several such pairs is enough. */
-export interface LeastCutting {
-  widthMm: number;
-  lengthMm: number;
-}
+export type { FaceArea, LeastCutting } from "./empty-rectangles.ts";
 
 export interface CuttingsFound {
   cuttings: FaceArea[];
   /** Clear area in all, mm². */
   areaMm2: number;
-  /** True when no better choice exists; false when the search stopped at its limit, or several cuttings were chosen one upon another. */
+  /** True when no better choice exists; false when it was found by search and there may be a better one. */
   isBest: boolean;
+  /** No choice of cuttings can have more clear area than this, mm²; proven, and the area itself when that is the best. */
+  atMostMm2: number;
 }
 
-const workLimit = 4_000;
+const workLimit = 2_000;
+const noiseMm2 = 1e-3;
+
+/** More cuttings than these may lie so that no straight line parts them. */
+const mostParted = 3;
 
 /**
  * Chooses at most so many clear rectangles on a face, apart from each other and from every defect, each no smaller than allowed, with as much area as can
- * be found. One cutting is exact: the largest empty rectangle has its sides on defects or edges. Several are found by taking largest ones in every
- * order, best bound first, up to a limit of work: near the best, and said to be no proof.
+ * be found. Up to three are exact while the work stays within its limit; of more it is exact when they take all that any cutting could. Otherwise it is
+ * near the best, and says that it is no proof.
+ *
+ * @throws RangeError for a face or a defect whose size is none.
  */
 export function clearCuttings(
-  face: { lengthMm: number; widthMm: number },
+  { lengthMm, widthMm }: { lengthMm: number; widthMm: number },
   defects: readonly FaceArea[],
   least: readonly LeastCutting[],
   most: number,
 ): CuttingsFound {
-  const whole: FaceArea = { alongMm: 0, acrossMm: 0, ...face };
+  requireSize("Length", lengthMm);
+  requireSize("Width", widthMm);
+  requireWithin("Cuttings", most, 1, 100);
+  for (const defect of defects) {
+    requireSize("Length of a defect", defect.lengthMm);
+    requireSize("Width of a defect", defect.widthMm);
+    requireWithin("Place of a defect along the board", defect.alongMm, -100_000, 100_000, "mm");
+    requireWithin("Place of a defect across the board", defect.acrossMm, -100_000, 100_000, "mm");
+  }
+  const face: FaceArea = { alongMm: 0, acrossMm: 0, lengthMm, widthMm };
+  const places = emptyRectangles(face, defects, least);
+  const largest = Math.max(0, ...places.map(areaOf));
+  const atMostMm2 = Math.min(coveredArea(places), most * largest);
+  const taken = takeLargest(face, defects, least, most);
+  if (total(taken) >= atMostMm2 - noiseMm2) return found(taken, atMostMm2);
+  const split = searchSplits(face, defects, least, Math.min(most, mostParted));
+  const best = split.areaMm2 > total(taken) ? split.cuttings : taken;
+  return found(best, most <= mostParted && split.isComplete ? total(best) : atMostMm2);
+}
+
+/** Takes largest empty rectangles one after another, in every order of the first few, as far as the limit of work reaches. */
+function takeLargest(
+  face: FaceArea,
+  defects: readonly FaceArea[],
+  least: readonly LeastCutting[],
+  most: number,
+): FaceArea[] {
   let best: FaceArea[] = [];
   let bestArea = 0;
   let work = 0;
-
   function search(chosen: FaceArea[], area: number, blocked: readonly FaceArea[]): void {
-    if (area > bestArea + 1e-6) {
-      bestArea = area;
-      best = chosen;
-    }
+    if (area > bestArea + 1e-6) [best, bestArea] = [chosen, area];
     if (chosen.length === most || work > workLimit) return;
-    const free = emptyRectangles(whole, blocked).filter((place) => isAllowed(place, least));
-    free.sort((a, b) => areaOf(b) - areaOf(a));
+    const free = emptyRectangles(face, blocked, least).sort((a, b) => areaOf(b) - areaOf(a));
     work += 1 + free.length;
     for (const place of free.slice(0, most - chosen.length === 1 ? 1 : 6)) {
       // Even if every cutting to come were as large as this one, could it still win?
@@ -54,70 +75,20 @@ export function clearCuttings(
     }
   }
   search([], 0, defects);
+  return best;
+}
+
+function total(cuttings: readonly FaceArea[]): number {
+  return cuttings.reduce((sum, place) => sum + areaOf(place), 0);
+}
+
+function found(cuttings: readonly FaceArea[], atMostMm2: number): CuttingsFound {
+  const inOrder = [...cuttings].sort((a, b) => a.alongMm - b.alongMm || a.acrossMm - b.acrossMm);
+  const areaMm2 = total(cuttings);
   return {
-    cuttings: best.sort((a, b) => a.alongMm - b.alongMm || a.acrossMm - b.acrossMm),
-    areaMm2: bestArea,
-    isBest: work <= workLimit && (most === 1 || best.length <= 1),
+    cuttings: inOrder,
+    areaMm2,
+    isBest: areaMm2 >= atMostMm2 - noiseMm2,
+    atMostMm2: Math.max(areaMm2, atMostMm2),
   };
-}
-
-function isAllowed(place: FaceArea, least: readonly LeastCutting[]): boolean {
-  return least.some(({ widthMm, lengthMm }) => place.widthMm >= widthMm - 1e-6 && place.lengthMm >= lengthMm - 1e-6);
-}
-
-function areaOf({ lengthMm, widthMm }: FaceArea): number {
-  return lengthMm * widthMm;
-}
-
-/**
- * Every empty rectangle that cannot grow: between each pair of lines across the board (edges of defects and the ends), the stretches of width that no
- * defect between them touches.
- */
-function emptyRectangles(whole: FaceArea, blocked: readonly FaceArea[]): FaceArea[] {
-  const lines = [
-    ...new Set([0, whole.lengthMm, ...blocked.flatMap((area) => [area.alongMm, area.alongMm + area.lengthMm])]),
-  ]
-    .filter((line) => line >= 0 && line <= whole.lengthMm)
-    .sort((a, b) => a - b);
-  const found: FaceArea[] = [];
-  for (let i = 0; i < lines.length; i++)
-    for (let j = i + 1; j < lines.length; j++) {
-      const [from, to] = [lines[i] as number, lines[j] as number];
-      const between = blocked.filter((area) => area.alongMm < to - 1e-9 && area.alongMm + area.lengthMm > from + 1e-9);
-      for (const [left, right] of gaps(between, whole.widthMm)) {
-        const place = { alongMm: from, lengthMm: to - from, acrossMm: left, widthMm: right - left };
-        if (!canGrow(place, whole, blocked)) found.push(place);
-      }
-    }
-  return found;
-}
-
-/** Stretches of the width that none of the areas covers. */
-function gaps(areas: readonly FaceArea[], widthMm: number): [number, number][] {
-  const free: [number, number][] = [];
-  let at = 0;
-  for (const { acrossMm, widthMm: width } of [...areas].sort((a, b) => a.acrossMm - b.acrossMm)) {
-    if (acrossMm - at > 1e-6) free.push([at, Math.min(acrossMm, widthMm)]);
-    at = Math.max(at, acrossMm + width);
-  }
-  if (widthMm - at > 1e-6) free.push([at, widthMm]);
-  return free.filter(([from, to]) => to > from);
-}
-
-/** Could the rectangle reach further along the board without meeting anything? Then a longer pair of lines gives it too. */
-function canGrow(place: FaceArea, whole: FaceArea, blocked: readonly FaceArea[]): boolean {
-  const meets = (from: number, to: number) =>
-    blocked.some(
-      (area) =>
-        area.alongMm < to - 1e-9 &&
-        area.alongMm + area.lengthMm > from + 1e-9 &&
-        area.acrossMm < place.acrossMm + place.widthMm - 1e-9 &&
-        area.acrossMm + area.widthMm > place.acrossMm + 1e-9,
-    );
-  const step = 0.01;
-  const end = place.alongMm + place.lengthMm;
-  return (
-    (place.alongMm > step && !meets(place.alongMm - step, place.alongMm)) ||
-    (end < whole.lengthMm - step && !meets(end, end + step))
-  );
 }

@@ -33,6 +33,8 @@ describe("the grades' demands", () => {
         { units: 54, cuttings: 3 },
       ],
     ],
+    ["No. 3B Common", 8, [{ units: 24, cuttings: null }]],
+    ["Selects", 16, [{ units: 160, cuttings: 4 }]],
     [
       "No. 2A Common",
       5,
@@ -43,6 +45,12 @@ describe("the grades' demands", () => {
     ],
   ])("%s at a surface measure of %d", (name, sm, demands) => {
     expect(demandsOf(rule(name), sm)).toEqual(demands);
+  });
+
+  test("over 17 ft and a surface measure over 16, one cutting more for each 4, at most 7 (NHLA 2015 p. 22)", () => {
+    expect(demandsOf(rule("FAS"), 20, 18)).toEqual([{ units: 200, cuttings: 5 }]);
+    expect(demandsOf(rule("FAS"), 40, 18)).toEqual([{ units: 400, cuttings: 7 }]);
+    expect(demandsOf(rule("FAS"), 20, 16)).toEqual([{ units: 200, cuttings: 4 }]);
   });
 
   test.each([
@@ -86,7 +94,7 @@ describe("grading a board", () => {
 
   test("too narrow for FAS, clear though it be, and it says why", () => {
     const graded = gradeBoard({ ...clear, widthMm: 5 * inch });
-    expect(graded.boardGrade).toBe("No. 1 Common");
+    expect(graded.boardGrade).toBe("Selects");
     expect(graded.poorer.tries[0]).toMatchObject({
       grade: "FAS",
       passes: false,
@@ -99,6 +107,75 @@ describe("grading a board", () => {
     const graded = gradeBoard({ ...clear, heartFace: knots, barkFace: knots });
     expect(graded.boardGrade).not.toBe("FAS");
     expect(graded.notice).toMatch(/no inspector's certificate/);
+  });
+
+  test("a smaller board with one face of FAS cuttings and the other No. 1 Common is Selects", () => {
+    // 5 in by 8 ft has a surface measure of 3, which allows FAS no cutting; 5 in by 10 ft has 4.
+    const small = { widthMm: 5 * inch, lengthMm: 10 * foot, heartFace: [], barkFace: [area(4.8, 1, 0.4, 3)] };
+    expect(gradeBoard(small)).toMatchObject({
+      surfaceMeasure: 4,
+      better: { face: "heart", grade: "Selects" },
+      poorer: { grade: "No. 1 Common" },
+      boardGrade: "Selects",
+    });
+    expect(gradeBoard({ ...small, lengthMm: 8 * foot }).better.tries[1]?.why).toMatch(/surface measure of 3 allows/);
+  });
+
+  test("the 97 % rule: two full-width cuttings of any length that make SM x 11.64 are FAS", () => {
+    // 8 in by 12 ft, a check right across at 2 ft, 0.3 ft long: 93.6 of 96 units, but 2 ft is too short for FAS cuttings.
+    const across = [area(2, 0, 0.3, 8)];
+    const graded = gradeBoard({ ...clear, barkFace: across });
+    expect(graded.poorer.tries[0]).toMatchObject({ grade: "FAS", passes: true, unitsNeeded: 93.12 });
+    expect(gradeBoard({ ...clear, barkFace: [area(2, 0, 0.4, 8)] }).poorer.tries[0]?.passes).toBe(false);
+  });
+
+  test("stain bars clear cuttings but not sound ones, and sapwood neither", () => {
+    const all = (kind: string) => [{ ...area(0, 0, 12, 8), kind }];
+    expect(gradeBoard({ ...clear, barkFace: all("sapwood") }).boardGrade).toBe("FAS");
+    expect(gradeBoard({ ...clear, barkFace: all("stain") }).poorer.grade).toBe("No. 2B Common");
+    expect(gradeBoard({ ...clear, barkFace: all("decay") })).toMatchObject({
+      better: { grade: null },
+      poorer: { grade: null },
+      boardGrade: null,
+    });
+  });
+
+  test("No. 3B Common takes sound pieces of 36 in² that are 1 1/2 in wide", () => {
+    // Of every 12 in the last 4 are rotten right across: 8 ft of 12, and each piece 8 by 8 in is too short for the others' 2 ft.
+    const rot = Array.from({ length: 12 }, (_, i) => ({ ...area(i + 8 / 12, 0, 4 / 12, 8), kind: "decay" }));
+    const graded = gradeBoard({ ...clear, heartFace: rot, barkFace: rot });
+    expect(graded.boardGrade).toBe("No. 3B Common");
+    expect(graded.poorer.tries.at(-1)?.unitsFound).toBeCloseTo(64, 6);
+  });
+
+  test("a tapering board is cut only where its narrow end's width reaches", () => {
+    const graded = gradeBoard({ ...clear, widthFarMm: 7 * inch });
+    for (const { widthMm, acrossMm } of graded.better.tries.at(-1)?.found?.cuttings ?? [])
+      expect(acrossMm + widthMm).toBeLessThanOrEqual(7 * inch + 1e-6);
+  });
+
+  test("a better grade is never given to a face with one defect more, where both answers are proven", () => {
+    const spot = fc.record({
+      along: fc.integer({ min: 0, max: 11 }),
+      across: fc.integer({ min: 0, max: 6 }),
+      wide: fc.integer({ min: 1, max: 3 }),
+    });
+    const rank = (name: string | null) => {
+      const at = gradeRules.findIndex((one) => one.name === name);
+      return at === -1 ? gradeRules.length : at;
+    };
+    fc.assert(
+      fc.property(fc.array(spot, { minLength: 1, maxLength: 4 }), (spots) => {
+        const areas = spots.map(({ along, across, wide }) => area(along, across, 0.5, wide));
+        const [fewer, more] = [areas.slice(1), areas].map((barkFace) => {
+          const { better, poorer } = gradeBoard({ ...clear, barkFace });
+          return better.face === "bark" ? better : poorer;
+        });
+        if (![fewer, more].every((face) => face?.tries.every((one) => one.isProven))) return;
+        expect(rank(fewer?.grade ?? null)).toBeLessThanOrEqual(rank(more?.grade ?? null));
+      }),
+      { numRuns: 25 },
+    );
   });
 
   test("a size that is none is refused", () => {

@@ -9,7 +9,7 @@ export interface FaceDefect extends FaceArea {
  * How a defect counts. "None": no defect. "Sound": a sound cutting may hold it, and so may the back of a clear one. "Unsound": neither may. "Unknown":
  * it may be sound, as a knot may; it is kept out of cuttings, but the back of one is taken to be sound.
  */
-export type Standing = "none" | "sound" | "unknown" | "unsound";
+type Standing = "none" | "sound" | "unknown" | "unsound";
 
 /**
  * Sapwood is no defect unless the contract says so, and stain is allowed in sound cuttings and on the back of clear ones: NHLA [confirmed, trade reference,
@@ -30,7 +30,7 @@ const standings: Readonly<Record<string, Standing>> = {
 };
 
 /** How a defect counts, by its kind; "unknown" for a knot and whatever else may be either. */
-export function standingOf({ kind }: FaceDefect): Standing {
+function standingOf({ kind }: FaceDefect): Standing {
   return (kind === undefined ? undefined : standings[kind]) ?? "unknown";
 }
 

@@ -17,7 +17,7 @@ export interface LeastCutting {
 const noiseMm = 1e-6;
 
 /** Whether a rectangle is large enough by one of the least sizes. */
-export function isAllowed(place: FaceArea, least: readonly LeastCutting[]): boolean {
+function isAllowed(place: FaceArea, least: readonly LeastCutting[]): boolean {
   return least.some(
     ({ widthMm, lengthMm, areaMm2 = 0 }) =>
       place.widthMm >= widthMm - noiseMm && place.lengthMm >= lengthMm - noiseMm && areaOf(place) >= areaMm2 - noiseMm,

@@ -1,4 +1,5 @@
 import { requireWithin } from "#app/core/moisture/accepted-range.ts";
+import { requireWhole } from "./whole-number.ts";
 
 export interface BlankToGlue {
   id: string;
@@ -22,6 +23,7 @@ export interface GlueBatch {
  *
  * @param spreadMinutes to spread glue and close the clamps of a batch, before the next can begin.
  * @returns the batches, and blanks that need more clamps than the shop owns.
+ * @throws RangeError for clamps that are no whole number, or minutes that are none.
  */
 export function glueBatches(
   blanks: readonly BlankToGlue[],
@@ -29,11 +31,11 @@ export function glueBatches(
   clampMinutes: number,
   spreadMinutes = 0,
 ): { batches: GlueBatch[]; tooMany: string[] } {
-  requireWithin("Clamps", clampsOwned, 0, 10_000);
+  requireWhole("Clamps", clampsOwned, 0, 10_000);
   requireWithin("Minutes in clamps", clampMinutes, 1, 100_000);
   requireWithin("Minutes to spread", spreadMinutes, 0, 10_000);
   for (const blank of blanks) {
-    requireWithin("Clamps of a blank", blank.clamps, 1, 10_000);
+    requireWhole("Clamps of a blank", blank.clamps, 1, 10_000);
     requireWithin("Minutes in clamps of a blank", blank.clampMinutes ?? clampMinutes, 1, 100_000);
   }
   const tooMany = blanks.filter((blank) => blank.clamps > clampsOwned).map((blank) => blank.id);

@@ -1,5 +1,6 @@
 import { requireSize, requireWithin } from "#app/core/moisture/accepted-range.ts";
-import { shopDefaults } from "./shop-defaults.ts";
+import { plySpread } from "#app/core/moisture/plies.ts";
+import { glueDefaults, shopDefaults } from "./shop-defaults.ts";
 
 /** What is about to be done, as far as it is known. What is left out raises no caution. Sizes in mm. */
 export interface Situation {
@@ -22,8 +23,16 @@ export interface Situation {
 /** How well a caution's source is known; of several, the least known. The words are those of the trade reference's tags. */
 export type CautionConfidence = "confirmed" | "confirmed-secondary" | "memory" | "practice";
 
+/**
+ * What is at stake, gravest first. "Danger": a machine or a falling load can maim at once. "Harm": health suffers, or an injury builds up. "Spoils": the
+ * work, or the right to sell it, is lost. Our own ranking; no source ranks them together.
+ */
+export const severities = ["danger", "harm", "spoils"] as const;
+export type Severity = (typeof severities)[number];
+
 export interface Caution {
   id: string;
+  severity: Severity;
   words: string;
   source: string;
   confidence: CautionConfidence;
@@ -31,6 +40,7 @@ export interface Caution {
 
 interface Row {
   id: string;
+  severity: Severity;
   when: (situation: Situation) => boolean;
   words: (situation: Situation) => string;
   source: string;
@@ -45,6 +55,7 @@ const shopRules = "School and shop rules (trade reference, section 10)";
 const table: Row[] = [
   {
     id: "jointer-short",
+    severity: "danger",
     when: ({ piece, jointer }) =>
       Boolean(piece && piece.lengthMm < (jointer?.minLengthMm ?? shopDefaults.jointerMinLengthMm)),
     words: () => `Too short for the jointer: mill it long and cut to length last, or plane it by hand. ${manual}`,
@@ -53,6 +64,7 @@ const table: Row[] = [
   },
   {
     id: "jointer-thin",
+    severity: "danger",
     when: ({ piece }) => Boolean(piece && piece.thicknessMm < inches(1 / 4)),
     words: () => `Too thin for jointer or planer without a carrier board: under 1/4 in. ${manual}`,
     source: `${shopRules} [secondary]`,
@@ -60,6 +72,7 @@ const table: Row[] = [
   },
   {
     id: "jointer-narrow",
+    severity: "danger",
     when: ({ piece }) => Boolean(piece && piece.widthMm < inches(3)),
     words: () =>
       `Narrower than 3 in: a push stick on edges and a push block on faces, hands never over the cutter. ${manual}`,
@@ -68,6 +81,7 @@ const table: Row[] = [
   },
   {
     id: "jointer-wide",
+    severity: "spoils",
     when: ({ piece, jointer }) => Boolean(piece && jointer && piece.widthMm > jointer.maxWidthMm),
     words: () => "Wider than this shop's jointer: rip it first, or flatten it another way.",
     source: "The shop's own setting",
@@ -75,6 +89,7 @@ const table: Row[] = [
   },
   {
     id: "planer-short",
+    severity: "danger",
     when: ({ piece, planer }) =>
       Boolean(piece && piece.lengthMm < (planer?.minLengthMm ?? shopDefaults.planerMinLengthMm)),
     words: () =>
@@ -84,6 +99,7 @@ const table: Row[] = [
   },
   {
     id: "planer-wide",
+    severity: "spoils",
     when: ({ piece, planer }) => Boolean(piece && planer && piece.widthMm > planer.maxWidthMm),
     words: () => "Wider than this shop's planer.",
     source: "The shop's own setting",
@@ -91,6 +107,7 @@ const table: Row[] = [
   },
   {
     id: "rip-narrow",
+    severity: "danger",
     when: ({ rip }) => rip?.fenceGapMm !== undefined && rip.fenceGapMm < inches(6),
     words: () => `Less than 6 in between blade and fence: a push stick or block, never the hand. ${manual}`,
     source: "School and shop rules (trade reference, section 10); 29 CFR 1910.213 (s)(9), from memory",
@@ -98,6 +115,7 @@ const table: Row[] = [
   },
   {
     id: "rip-too-tall",
+    severity: "danger",
     when: ({ rip }) => Boolean(rip && rip.heightMm > 2 * rip.bladeHeightMm),
     words: () =>
       `Two passes from both edges do not meet at this height: not a table saw's work. Part it on a bandsaw, or by hand. ${manual}`,
@@ -106,14 +124,16 @@ const table: Row[] = [
   },
   {
     id: "rip-tall",
+    severity: "danger",
     when: ({ rip }) => Boolean(rip && rip.heightMm > rip.bladeHeightMm && rip.heightMm <= 2 * rip.bladeHeightMm),
     words: () =>
-      `Taller than the blade cuts in one pass. A bandsaw is the better tool. On a table saw it takes two passes, turned end for end with the same face to the fence: riving knife, guard where it can stay, featherboards, push blocks, and out of the line of the blade. ${manual}`,
+      `Taller than the blade cuts in one pass. A bandsaw is the better tool. On a table saw it takes two passes, turned end for end with the same face to the fence, and a web left between them for the bandsaw or a handsaw: riving knife, guard wherever the cut lets it stay, featherboards, push blocks, and out of the line of the blade. ${manual}`,
     source: "Common practice (trade reference, section 10); 29 CFR 1910.213 (c), (s)(9), from memory",
     confidence: "memory",
   },
   {
     id: "resaw-tension",
+    severity: "danger",
     when: ({ resawing }) => Boolean(resawing),
     words: () =>
       `Thick stock moves when it is parted: tension lets go and can close on the blade. Stop, wedge, let it rest a day, then flatten again. ${manual}`,
@@ -122,6 +142,7 @@ const table: Row[] = [
   },
   {
     id: "dust",
+    severity: "harm",
     when: ({ dust }) => Boolean(dust),
     words: ({ dust }) =>
       `${dust?.words}${dust?.strongSensitiser ? " It is among the woods that sensitise most." : ""} Collect dust where it is made and wear a mask that fits.`,
@@ -130,6 +151,7 @@ const table: Row[] = [
   },
   {
     id: "trade",
+    severity: "spoils",
     when: ({ trade }) => Boolean(trade),
     words: ({ trade }) => `${trade?.words} Keep its papers with the board's record, and check the current appendices.`,
     source: "CITES appendices, from memory",
@@ -137,6 +159,7 @@ const table: Row[] = [
   },
   {
     id: "arm-load",
+    severity: "danger",
     when: ({ armLoadShare }) => (armLoadShare ?? 0) > 1,
     words: () =>
       "More on this arm than the rating the shop entered: take boards off. A rating kept does not make a rack safe; its maker's instructions and its anchors do.",
@@ -145,6 +168,7 @@ const table: Row[] = [
   },
   {
     id: "lift",
+    severity: "harm",
     when: ({ liftKg }) => (liftKg ?? 0) > 23,
     words: () => "Heavier than one person should lift even in a good place: take it by two, or slide it.",
     source: "NIOSH lifting equation's load constant, 23 kg, from memory",
@@ -152,7 +176,8 @@ const table: Row[] = [
   },
   {
     id: "glue-cold",
-    when: ({ gluing }) => gluing?.temperatureC !== undefined && gluing.temperatureC < 10,
+    severity: "spoils",
+    when: ({ gluing }) => gluing?.temperatureC !== undefined && gluing.temperatureC < glueDefaults.leastTemperatureC,
     words: () =>
       "Colder than most wood glues take (about 50 °F, 10 °C): the film chalks and does not hold. The label says what yours needs.",
     source: "Trade reference, section 11: common practice",
@@ -160,7 +185,10 @@ const table: Row[] = [
   },
   {
     id: "glue-moisture",
-    when: ({ gluing }) => spread(gluing?.moisturesPct) > 2,
+    severity: "spoils",
+    when: ({ gluing }) =>
+      Boolean(gluing?.moisturesPct?.length) &&
+      !plySpread(gluing?.moisturesPct ?? [], glueDefaults.pliesWithinPoints).isWithin,
     words: () =>
       "The plies are more than 2 points of moisture apart: they will part again, or cup. Let them even out before gluing.",
     source: "Trade reference, section 11: common practice, 1 to 2 points",
@@ -168,12 +196,9 @@ const table: Row[] = [
   },
 ];
 
-function spread(values: readonly number[] = []): number {
-  return values.length > 1 ? Math.max(...values) - Math.min(...values) : 0;
-}
-
 /**
- * The cautions that a situation calls for, each with where it comes from and how well that is known. They stand beside the number that calls for them.
+ * The cautions that a situation calls for, the gravest first, each with where it comes from and how well that is known. They stand beside the number that
+ * calls for them.
  *
  * @throws RangeError for a figure that is none: a caution is never left out because a number could not be compared.
  */
@@ -181,14 +206,27 @@ export function cautionsFor(situation: Situation): Caution[] {
   requireFigures(situation);
   return table
     .filter(({ when }) => when(situation))
-    .map(({ id, words, source, confidence }) => ({ id, words: words(situation), source, confidence }));
+    .map(({ id, severity, words, source, confidence }) => ({
+      id,
+      severity,
+      words: words(situation),
+      source,
+      confidence,
+    }))
+    .sort((a, b) => severities.indexOf(a.severity) - severities.indexOf(b.severity));
 }
 
-function requireFigures({ piece, rip, armLoadShare, liftKg, gluing }: Situation): void {
+function requireFigures({ piece, jointer, planer, rip, armLoadShare, liftKg, gluing }: Situation): void {
   if (piece) {
     requireSize("Piece's length", piece.lengthMm);
     requireSize("Piece's width", piece.widthMm);
     requireSize("Piece's thickness", piece.thicknessMm);
+  }
+  for (const machine of [jointer, planer]) {
+    requireWithin("Machine's least length", machine?.minLengthMm ?? 0, 0, 100_000, "mm");
+    // A machine that any width goes through may be given as infinitely wide.
+    if (machine?.maxWidthMm !== Number.POSITIVE_INFINITY)
+      requireWithin("Machine's greatest width", machine?.maxWidthMm ?? 0, 0, 100_000, "mm");
   }
   if (rip) {
     requireSize("Height on the saw", rip.heightMm);

@@ -18,15 +18,15 @@ export interface MillingStep {
   /** What is done. */
   step:
     | "rough length"
-    | "joint a face"
-    | "joint the inner plies' other face"
+    | "joint a face and an edge"
     | "rip to rough width"
+    | "joint the inner plies' other face"
     | "glue up"
-    | "joint face and edge"
+    | "joint the blank's face and edge"
     | "plane to thickness"
     | "rip and plane to width"
     | "cut to length";
-  /** The piece after it; plies before the glue-up, the blank from it on. */
+  /** The piece after it; plies before the glue-up, the blank from it on. Before the rip to rough width it is the least that the board must hold. */
   size: Size;
   pieces: number;
 }
@@ -37,11 +37,15 @@ export interface MillingSheet {
 }
 
 /**
- * The sizes of a blank at each step from rough to finished, long pieces cut to length last (trade reference, section 10: common practice).
+ * The sizes of a blank at each step from rough to finished. A face and an edge are jointed before anything is ripped, as a saw wants a straight edge on its
+ * fence and a flat face on its table, and pieces are cut to length last (trade reference, section 10: common practice).
+ *
+ * A single ply is jointed once, and half of what is to come off goes with it; of several, each loses its jointing, and the blank is jointed anew.
  *
  * @param finished the part.
  * @param stockMm measured thickness of the rough stock.
  * @returns null when the stock cannot make the thickness.
+ * @throws RangeError for a size or an allowance that is none.
  */
 export function millingSheet(finished: Size, stockMm: number, allow: MillingAllowances): MillingSheet | null {
   requireSize("Finished length", finished.lengthMm);
@@ -57,7 +61,7 @@ export function millingSheet(finished: Size, stockMm: number, allow: MillingAllo
   if (!plies) return null;
   const lengthMm = finished.lengthMm + allow.lengthMm;
   const widthMm = finished.widthMm + allow.widthMm;
-  // Half of the width's allowance goes when the first edge is jointed, the rest when the second is.
+  // Half of the width's allowance goes when the blank's edge is jointed, the rest when it is ripped and planed to width.
   const jointedMm = widthMm - allow.widthMm / 2;
   const step = (
     name: MillingStep["step"],
@@ -71,23 +75,29 @@ export function millingSheet(finished: Size, stockMm: number, allow: MillingAllo
     size: { lengthMm: length, widthMm: width, thicknessMm },
   });
   const glued = plies.plies > 1;
+  const halfwayMm = finished.thicknessMm + plies.toTakeOffMm / 2;
   const steps = [
-    step("rough length", plies.plies, stockMm),
-    step("rip to rough width", plies.plies, stockMm),
-    ...(glued ? [step("joint a face", plies.plies, plies.outerPlyMm)] : []),
+    step("rough length", plies.plies, stockMm, widthMm + allow.jointPerFaceMm),
+    step("joint a face and an edge", plies.plies, glued ? plies.outerPlyMm : halfwayMm),
+    step("rip to rough width", plies.plies, glued ? plies.outerPlyMm : halfwayMm),
     ...(plies.innerPlyMm === null
       ? []
       : [step("joint the inner plies' other face", plies.plies - 2, plies.innerPlyMm)]),
-    ...(glued ? [step("glue up", 1, plies.gluedMm)] : []),
-    step("joint face and edge", 1, finished.thicknessMm + plies.toTakeOffMm / 2, jointedMm),
-    step("plane to thickness", 1, finished.thicknessMm, jointedMm),
+    ...(glued
+      ? [step("glue up", 1, plies.gluedMm), step("joint the blank's face and edge", 1, halfwayMm, jointedMm)]
+      : []),
+    step("plane to thickness", 1, finished.thicknessMm, glued ? jointedMm : widthMm),
     step("rip and plane to width", 1, finished.thicknessMm, finished.widthMm),
     step("cut to length", 1, finished.thicknessMm, finished.widthMm, finished.lengthMm),
   ];
   return { plies, steps };
 }
 
-/** How many rough lengths a board gives when it is split: each part's length and allowance, and a kerf between. */
+/**
+ * How many rough lengths a board gives when it is split: each part's length and allowance, and a kerf between.
+ *
+ * @throws RangeError for a size, an allowance (0 to 1,000 mm) or a kerf (0 to 20 mm) that is none.
+ */
 export function roughLengths(boardMm: number, partMm: number, allowanceMm: number, kerfMm: number): number {
   requireSize("Board", boardMm);
   requireSize("Part", partMm);

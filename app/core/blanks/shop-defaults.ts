@@ -32,3 +32,27 @@ export const shopDefaults = {
 
 /** A light planer pass, 1/40 in: so deep that half an inch takes twenty. Common practice. */
 export const planerPassMm = inches(1 / 40);
+
+/** Glue-up pressures that makers of PVA glue ask for, psi. Trade reference, section 11 [secondary: adhesive makers]. */
+export const pressuresPsi = { softwood: { low: 100, high: 150 }, hardwood: { low: 175, high: 250 } } as const;
+
+/** Clamping force by kind, lbf: what a hand gets out of it. Trade reference, section 11 [secondary]. */
+export const clampForcesLbf = { "pipe clamp": 1000, "parallel-jaw clamp": 370, "heavy I-bar clamp": 1350 } as const;
+
+/** What a PVA glue is taken to ask for until the shop enters its own label's figures; the label always wins. Trade reference, section 11. */
+export const glueDefaults = {
+  /** The low end for hardwood [secondary: adhesive makers]. */
+  pressurePsi: pressuresPsi.hardwood.low,
+  /** On one glue line, g/m²: makers' range, from memory. */
+  spreadGramsPerM2: { low: 170, high: 250 },
+  /** From spreading to closing the joint: 5 to 10 minutes, the shorter of them. Common practice. */
+  openMinutes: 5,
+  /** In clamps, unstressed: 30 to 60 minutes, the longer of them; more when cold or dense. Common practice. */
+  clampMinutes: 60,
+  /** Until the joint bears its full load. Common practice. */
+  cureMinutes: 24 * 60,
+  /** About 50 °F. Common practice. */
+  leastTemperatureC: 10,
+  /** Plies of a blank within so many points of moisture. Common practice; structural glulam allows 5 (ANSI A190.1, from memory). */
+  pliesWithinPoints: 2,
+} as const;

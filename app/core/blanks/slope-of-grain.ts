@@ -29,7 +29,10 @@ export function slopeDeg(oneIn: number): number {
   return (Math.atan(1 / oneIn) * 180) / Math.PI;
 }
 
-/** Bending strength left at a slope of 1 in n, percent: the table, straight between its rows; 100 from 1 in 60, null steeper than 1 in 5, where it ends. */
+/**
+ * Bending strength left at a slope of 1 in n, percent: the table, straight between its rows; null steeper than 1 in 5, where it ends. The table has no slope
+ * for "straight"; that it is reached at 1 in 60, under one degree, is our own choice.
+ */
 export function bendingLeftPct(oneIn: number): number | null {
   requireWithin("Slope, one in", oneIn, 0.01, 1e6);
   const rows = [...slopeTable, { oneIn: 60, bendingPct: 100 }];

@@ -23,14 +23,14 @@ const inch = 25.4;
 const clamps = (widthIn: number, lengthIn: number, psi: number, padIn = 100) =>
   clampsFor({ widthMm: widthIn * inch, lengthMm: lengthIn * inch }, psi, newtonsFromLbf(1000), padIn * inch);
 
-/** Sizes of a leg as ripped rough, its allowances in inches. */
+/** Sizes of a leg as its rough piece must hold them, its allowances in inches. */
 function roughLeg(finishedIn: { t: number; w: number; l: number }, addIn: { t: number; w: number; l: number }) {
   const sheet = millingSheet(
     { thicknessMm: finishedIn.t * inch, widthMm: finishedIn.w * inch, lengthMm: finishedIn.l * inch },
     (finishedIn.t + addIn.t) * inch,
     { thicknessMm: addIn.t * inch, widthMm: addIn.w * inch, lengthMm: addIn.l * inch, jointPerFaceMm: 0 },
   );
-  const size = sheet?.steps.find(({ step }) => step === "rip to rough width")?.size;
+  const size = sheet?.steps.find(({ step }) => step === "rough length")?.size;
   return size && { t: size.thicknessMm / inch, w: size.widthMm / inch, l: size.lengthMm / inch };
 }
 

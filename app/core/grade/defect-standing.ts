@@ -30,7 +30,7 @@ const standings: Readonly<Record<string, Standing>> = {
 };
 
 /** How a defect counts, by its kind; "unknown" for a knot and whatever else may be either. */
-function standingOf({ kind }: FaceDefect): Standing {
+export function standingOf({ kind }: FaceDefect): Standing {
   return (kind === undefined ? undefined : standings[kind]) ?? "unknown";
 }
 

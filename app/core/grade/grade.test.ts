@@ -110,7 +110,6 @@ describe("grading a board", () => {
   });
 
   test("a smaller board with one face of FAS cuttings and the other No. 1 Common is Selects", () => {
-    // 5 in by 8 ft has a surface measure of 3, which allows FAS no cutting; 5 in by 10 ft has 4.
     const small = { widthMm: 5 * inch, lengthMm: 10 * foot, heartFace: [], barkFace: [area(4.8, 1, 0.4, 3)] };
     expect(gradeBoard(small)).toMatchObject({
       surfaceMeasure: 4,
@@ -118,7 +117,44 @@ describe("grading a board", () => {
       poorer: { grade: "No. 1 Common" },
       boardGrade: "Selects",
     });
-    expect(gradeBoard({ ...small, lengthMm: 8 * foot }).better.tries[1]?.why).toMatch(/surface measure of 3 allows/);
+  });
+
+  // A distributor's copy of the NHLA chart [secondary].
+  test("the smallest boards are allowed one cutting, of more of the face", () => {
+    expect(demandsOf(rule("Selects"), 3)).toEqual([{ units: 33, cuttings: 1 }]);
+    expect(demandsOf(rule("No. 1 Common"), 1)).toEqual([{ units: 12, cuttings: 1 }]);
+    expect(demandsOf(rule("No. 1 Common"), 2)).toEqual([{ units: 18, cuttings: 1 }]);
+    expect(demandsOf(rule("No. 2A Common"), 1)).toEqual([{ units: 8, cuttings: 1 }]);
+    const five = { widthMm: 5 * inch, lengthMm: 8 * foot, heartFace: [], barkFace: [] };
+    expect(gradeBoard(five)).toMatchObject({ surfaceMeasure: 3, boardGrade: "Selects" });
+    // 5 in by 6 ft, 30 units of clear wood, counts as 3 ft²: clear all over is enough, though SM x 11 is 33.
+    expect(gradeBoard({ ...five, lengthMm: 6 * foot })).toMatchObject({ surfaceMeasure: 3, boardGrade: "Selects" });
+    // An inch of 8 ft gone leaves 39.6 units of the 33; a foot and a half in the middle leaves 16 in the one cutting.
+    expect(gradeBoard({ ...five, barkFace: [area(0, 0, 1 / 12, 5)] }).poorer.grade).toBe("Selects");
+    expect(gradeBoard({ ...five, barkFace: [area(3.5, 0, 1.5, 5)] }).poorer.grade).not.toBe("Selects");
+  });
+
+  test("a kiln-dried board may be 1/4 in under a grade's least width, no more (NHLA 2023 p. 56)", () => {
+    const dried = (widthIn: number, isKilnDried?: boolean) =>
+      gradeBoard({ ...clear, widthMm: widthIn * inch, isKilnDried }).boardGrade;
+    expect(dried(5.75, true)).toBe("FAS");
+    expect(dried(5.75)).toBe("Selects");
+    expect(dried(5.7, true)).toBe("Selects");
+    expect(gradeBoard({ ...clear, widthMm: 5 * inch, isKilnDried: true }).poorer.tries[0]?.why).toBe(
+      "A board of 6 in, or 5.75 in once kiln dried, by 8 ft at least.",
+    );
+  });
+
+  test("an exact half foot of surface measure goes up, whatever a millimetre's noise says (AHEC for widths; NHLA, from memory)", () => {
+    expect(gradeBoard({ ...clear, widthMm: 6.5 * inch }).surfaceMeasure).toBe(7);
+    expect(gradeBoard({ ...clear, widthMm: 6.5 * inch - 0.001 }).surfaceMeasure).toBe(7);
+  });
+
+  test("a tapering board is as wide as it is a third from its narrow end, and may not pass by having less to ask of", () => {
+    // 8 in at one end and 4 at the other: 5 1/3 in, too narrow for FAS. 12 and 6: 8 in, of which 6 are there from end to end, three quarters.
+    expect(gradeBoard({ ...clear, widthFarMm: 4 * inch }).poorer.tries[0]?.why).toMatch(/^A board of 6 in/);
+    const wide = gradeBoard({ ...clear, widthMm: 12 * inch, widthFarMm: 6 * inch });
+    expect(wide).toMatchObject({ surfaceMeasure: 8, boardGrade: "No. 1 Common" });
   });
 
   test("the 97 % rule: two full-width cuttings of any length that make SM x 11.64 are FAS", () => {

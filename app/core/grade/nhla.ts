@@ -26,6 +26,11 @@ export interface GradeRule {
   cuttings: (surfaceMeasure: number) => number | null;
   /** One cutting more, for more units, within this range of surface measure. */
   extra: { fromSm: number; toSm: number; unitsPerSm: number } | null;
+  /**
+   * Surface measures too small for the table: one cutting, of so many units for each foot. A distributor's copy of the NHLA chart, its columns run together
+   * [secondary]: Selects of 2 and 3 clear or SM × 11; No. 1 Common of 1 clear, of 2 SM × 9; No. 2 of 1 SM × 8.
+   */
+  small: Readonly<Record<number, number>>;
   /** One cutting more for each 4 of surface measure over 16 in boards over 17 ft, up to 7. NHLA 2015 p. 22 [confirmed]. */
   moreWhenLong: boolean;
 }
@@ -41,6 +46,7 @@ const fasCuttings = {
   unitsPerSm: 10,
   cuttings: (sm: number) => Math.min(4, Math.floor(sm / 4)),
   extra: { fromSm: 6, toSm: 15, unitsPerSm: 11 },
+  small: {},
   moreWhenLong: true,
 } as const;
 
@@ -50,6 +56,7 @@ const no2Cuttings = {
   unitsPerSm: 6,
   cuttings: (sm: number) => Math.min(7, Math.floor(sm / 2)),
   extra: { fromSm: 2, toSm: 7, unitsPerSm: 8 },
+  small: { 1: 8 },
   moreWhenLong: false,
 } as const;
 
@@ -62,7 +69,7 @@ const no3BCutting = { ...cutting(1.5, 1 / 12), areaMm2: 36 * mmPerInch * mmPerIn
  */
 export const gradeRules: readonly GradeRule[] = [
   { name: "FAS", leastBoard: { widthIn: 6, lengthFt: 8 }, ...fasCuttings },
-  { name: "Selects", leastBoard: { widthIn: 4, lengthFt: 6 }, ...fasCuttings },
+  { name: "Selects", leastBoard: { widthIn: 4, lengthFt: 6 }, ...fasCuttings, small: { 2: 11, 3: 11 } },
   {
     name: "No. 1 Common",
     leastBoard: { widthIn: 3, lengthFt: 4 },
@@ -71,6 +78,7 @@ export const gradeRules: readonly GradeRule[] = [
     unitsPerSm: 8,
     cuttings: (sm) => Math.min(5, Math.floor((sm + 1) / 3)),
     extra: { fromSm: 3, toSm: 10, unitsPerSm: 9 },
+    small: { 1: 12, 2: 9 },
     moreWhenLong: true,
   },
   { name: "No. 2A Common", kind: "clear", ...no2Cuttings },
@@ -83,6 +91,7 @@ export const gradeRules: readonly GradeRule[] = [
     unitsPerSm: 4,
     cuttings: () => null,
     extra: null,
+    small: {},
     moreWhenLong: false,
   },
   {
@@ -93,16 +102,19 @@ export const gradeRules: readonly GradeRule[] = [
     unitsPerSm: 3,
     cuttings: () => null,
     extra: null,
+    small: {},
     moreWhenLong: false,
   },
 ];
 
-/** What a grade asks of a surface measure: units and cuttings, plainly or with the extra cutting. */
+/** What a grade asks of a surface measure: units and cuttings, plainly or with the extra cutting, or of a small board the one that it allows. */
 export function demandsOf(
   rule: GradeRule,
   surfaceMeasure: number,
   lengthFt = 0,
 ): { units: number; cuttings: number | null }[] {
+  const small = rule.small[surfaceMeasure];
+  if (small !== undefined) return [{ units: small * surfaceMeasure, cuttings: 1 }];
   const plain = { units: rule.unitsPerSm * surfaceMeasure, cuttings: rule.cuttings(surfaceMeasure) };
   const { extra } = rule;
   if (plain.cuttings === null) return [plain];

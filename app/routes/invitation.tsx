@@ -3,6 +3,7 @@ import { Button, ButtonLink } from "#app/components/button.tsx";
 import { FrontDoor } from "#app/components/front-door.tsx";
 import { Notice } from "#app/components/notice.tsx";
 import { acceptInvitation, findInvitation } from "#app/domain/people/people.server.ts";
+import { roleWords } from "#app/domain/people/role-words.ts";
 import { dbContext, visitContext } from "#app/server/context.server.ts";
 import { requireVisit } from "#app/server/guards.server.ts";
 import { chooseShop } from "#app/server/session.server.ts";
@@ -21,14 +22,14 @@ export async function action({ context, params, url }: Route.ActionArgs) {
   const visit = requireVisit(context, url);
   const db = context.get(dbContext);
   const shopId = await acceptInvitation(db, visit, params.token, systemClock.now());
-  if (!shopId) return data(null, { status: 410 });
+  if (!shopId) return data({ usedUp: true }, { status: 410 });
   await chooseShop(db, visit, shopId);
   return redirect(visit.personName ? href("/rack") : href("/account"));
 }
 
-export default function AcceptInvitation({ loaderData, params }: Route.ComponentProps) {
+export default function AcceptInvitation({ loaderData, actionData, params }: Route.ComponentProps) {
   const { found, signedInAs } = loaderData;
-  if (!found)
+  if (!found || actionData?.usedUp)
     return (
       <FrontDoor title="That invitation is used up">
         <Notice kind="caution">
@@ -37,7 +38,7 @@ export default function AcceptInvitation({ loaderData, params }: Route.Component
         <ButtonLink to={href("/rack")}>To your shop</ButtonLink>
       </FrontDoor>
     );
-  const lead = `${found.invitedBy} asks ${found.email} in, as ${found.role}.`;
+  const lead = `${found.invitedBy || "An owner"} asks ${found.email} in, as ${found.role}: ${roleWords[found.role]}.`;
   return (
     <FrontDoor title={found.shopName} lead={lead}>
       {signedInAs === found.email ? (

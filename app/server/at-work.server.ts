@@ -2,9 +2,9 @@ import { data, href, type MiddlewareFunction, type RouterContextProvider, redire
 import { isIdentifier } from "#app/core/identifiers/identifier.ts";
 import { membershipOf } from "#app/domain/people/people.sql.server.ts";
 import { getShop } from "#app/domain/shop/shops.sql.server.ts";
-import { env } from "#app/services/env.server.ts";
 import { type AtWork, atWorkContext, dbContext, visitContext } from "./context.server.ts";
 import { notHere } from "./guards.server.ts";
+import { isWrite, originOf } from "./origin.server.ts";
 
 /** Who is at work, or what is missing: a sign-in, or a shop. The membership is read anew for every request, so a removed person is out at once. */
 async function findAtWork(context: Readonly<RouterContextProvider>): Promise<AtWork | "sign in" | "no shop"> {
@@ -21,8 +21,7 @@ async function findAtWork(context: Readonly<RouterContextProvider>): Promise<AtW
 /** Guards a shop's pages: a stranger signs in and comes back, a person without a shop chooses or opens one. */
 export const requireAtWork: MiddlewareFunction<Response> = async ({ request, context, params, url }) => {
   // The framework asks this for addresses that have a page, not for buttons that post to one without.
-  if (isWrite(request) && request.headers.has("Origin") && !isOwnOrigin(request))
-    throw data({ why: "origin" }, { status: 403 });
+  if (isWrite(request) && originOf(request) === "foreign") throw data({ why: "origin" }, { status: 403 });
   const found = await findAtWork(context);
   if (found === "sign in")
     throw redirect(`${href("/sign-in")}?${new URLSearchParams({ to: url.pathname + url.search })}`);
@@ -33,7 +32,8 @@ export const requireAtWork: MiddlewareFunction<Response> = async ({ request, con
 
 /** Guards JSON addresses: answers in JSON, and takes writes from our own pages only. */
 export const requireAtWorkJson: MiddlewareFunction<Response> = async ({ request, context, params }) => {
-  if (isWrite(request) && !isOwnOrigin(request)) throw data({ why: "origin" }, { status: 403 });
+  // A browser says where a write comes from. One that says nothing is no browser of ours.
+  if (isWrite(request) && originOf(request) !== "ours") throw data({ why: "origin" }, { status: 403 });
   const found = await findAtWork(context);
   if (typeof found === "string") throw data({ why: found }, { status: found === "sign in" ? 401 : 403 });
   requireIdentifiers(params);
@@ -43,15 +43,4 @@ export const requireAtWorkJson: MiddlewareFunction<Response> = async ({ request,
 /** What cannot be an identifier is not here, and never gets as far as a query: the database refuses to compare some of it. */
 function requireIdentifiers(params: Record<string, string | undefined>): void {
   for (const [name, value] of Object.entries(params)) if (name.endsWith("Id") && !isIdentifier(value)) notHere();
-}
-
-function isWrite({ method }: Request): boolean {
-  return method !== "GET" && method !== "HEAD";
-}
-
-/** A browser says where a write comes from. One that says nothing is no browser of ours. */
-function isOwnOrigin(request: Request): boolean {
-  const origin = request.headers.get("Origin");
-  if (!origin || !URL.canParse(origin)) return false;
-  return new URL(origin).host === request.headers.get("Host") || origin === new URL(env().PUBLIC_URL).origin;
 }

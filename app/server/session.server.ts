@@ -1,8 +1,16 @@
 import { createHash } from "node:crypto";
 import type { Knex } from "knex";
 import { createCookie } from "react-router";
+import {
+  endSessionBySecret,
+  extendSession,
+  findSession,
+  insertSession,
+  setSessionShop,
+  touchSession,
+} from "#app/domain/people/sessions.sql.server.ts";
 import { env } from "#app/services/env.server.ts";
-import { newId, newSecret } from "#app/services/ids.server.ts";
+import { newSecret } from "#app/services/ids.server.ts";
 import type { Visit } from "./context.server.ts";
 
 /** How long a session lasts unused: a shop's phone stays signed in for a season. */
@@ -10,6 +18,9 @@ const lifetimeMs = 60 * 86_400_000;
 
 /** last_seen_at moves at most this often: a page view is not worth a write. */
 const seenEveryMs = 5 * 60_000;
+
+/** A session in use is made to last longer at most this often, row and cookie together. */
+const extendEveryMs = 86_400_000;
 
 /** The cookie holds a random secret, signed, and nothing else. Secure as soon as the shop is reached by https. */
 function cookie() {
@@ -27,34 +38,55 @@ function hash(secret: string): string {
   return createHash("sha256").update(secret).digest("hex");
 }
 
+function endOf(now: Date): Date {
+  return new Date(now.getTime() + lifetimeMs);
+}
+
 async function secretOf(request: Request): Promise<string | null> {
   const value: unknown = await cookie().parse(request.headers.get("Cookie"));
   return typeof value === "string" && value !== "" ? value : null;
 }
 
-/** Who this request comes from, or null: no cookie, a forged one, or a session that ended. */
+export interface FoundSession {
+  visit: Visit;
+  /** Has it been in use for so long that it should be made to last longer? */
+  dueToExtend: boolean;
+}
+
+/** The session of a request, or null: no cookie, a forged one, or a session that ended. Notes that it was used. */
+export async function readSession(db: Knex, request: Request, now: Date): Promise<FoundSession | null> {
+  const secret = await secretOf(request);
+  const row = secret ? await findSession(db, hash(secret), now) : null;
+  if (!row) return null;
+  if (now.getTime() - row.lastSeenAt.getTime() > seenEveryMs) await touchSession(db, row.id, now);
+  const { id: sessionId, personId, personName, email, shopId, expiresAt } = row;
+  return {
+    visit: { sessionId, personId, personName, email, shopId },
+    dueToExtend: endOf(now).getTime() - expiresAt.getTime() > extendEveryMs,
+  };
+}
+
+/** Who this request comes from, or null for a stranger. */
 export async function readVisit(db: Knex, request: Request, now: Date): Promise<Visit | null> {
+  return (await readSession(db, request, now))?.visit ?? null;
+}
+
+/**
+ * Lets a session last its whole time again from now on. The cookie is signed anew with the first secret, so that an old one can be dropped after a season.
+ *
+ * @returns the Set-Cookie header; null without a session.
+ */
+export async function keepSession(db: Knex, request: Request, visit: Visit, now: Date): Promise<string | null> {
   const secret = await secretOf(request);
   if (!secret) return null;
-  const row = await db("sessions as s")
-    .join("people as p", "p.id", "s.person_id")
-    .where("s.secret_hash", hash(secret))
-    .where("s.expires_at", ">", now)
-    .first({
-      sessionId: "s.id",
-      personId: "p.id",
-      personName: "p.name",
-      email: "p.email",
-      shopId: "s.shop_id",
-      lastSeenAt: "s.last_seen_at",
-    });
-  if (!row) return null;
-  const { lastSeenAt, ...visit } = row;
-  if (now.getTime() - lastSeenAt.getTime() > seenEveryMs)
-    await db("sessions")
-      .where({ id: visit.sessionId })
-      .update({ last_seen_at: now, expires_at: new Date(now.getTime() + lifetimeMs) });
-  return visit;
+  await extendSession(db, visit.sessionId, endOf(now));
+  return cookie().serialize(secret);
+}
+
+/** Does an answer say already what the browser's session is: one begun, or ended? */
+export function setsSession(headers: Headers): boolean {
+  const { name } = cookie();
+  return headers.getSetCookie().some((line) => line.startsWith(`${name}=`));
 }
 
 /**
@@ -70,30 +102,19 @@ export async function startSession(
 ): Promise<string> {
   await endSession(db, request);
   const secret = newSecret();
-  await db("sessions").insert({
-    id: newId(),
-    secret_hash: hash(secret),
-    person_id: session.personId,
-    shop_id: session.shopId,
-    user_agent: (request.headers.get("User-Agent") ?? "").slice(0, 255),
-    created_at: now,
-    last_seen_at: now,
-    expires_at: new Date(now.getTime() + lifetimeMs),
-  });
+  const userAgent = request.headers.get("User-Agent") ?? "";
+  await insertSession(db, { ...session, secretHash: hash(secret), userAgent, now, expiresAt: endOf(now) });
   return cookie().serialize(secret);
 }
 
 /** Ends the session of this request. @returns the Set-Cookie header that forgets it. */
 export async function endSession(db: Knex, request: Request): Promise<string> {
   const secret = await secretOf(request);
-  if (secret)
-    await db("sessions")
-      .where({ secret_hash: hash(secret) })
-      .delete();
+  if (secret) await endSessionBySecret(db, hash(secret));
   return cookie().serialize("", { maxAge: 0 });
 }
 
 /** Which shop this session is in. */
-export async function chooseShop(db: Knex, visit: Visit, shopId: string): Promise<void> {
-  await db("sessions").where({ id: visit.sessionId, person_id: visit.personId }).update({ shop_id: shopId });
+export function chooseShop(db: Knex, visit: Visit, shopId: string): Promise<void> {
+  return setSessionShop(db, visit.personId, visit.sessionId, shopId);
 }

@@ -1,15 +1,10 @@
 import { describe, expect, test } from "vitest";
 import { anActor, aPerson } from "#tests/factories/shop.ts";
 import { useTestDb } from "#tests/setup/test-db.ts";
+import { listInvitations } from "./invitations.sql.server.ts";
 import { acceptInvitation, changeMember, findInvitation, invite, openShop, revokeInvitation } from "./people.server.ts";
-import {
-  endSessionOf,
-  lastShopOf,
-  listInvitations,
-  listMembers,
-  membershipOf,
-  personByEmail,
-} from "./people.sql.server.ts";
+import { lastShopOf, listMembers, membershipOf, personByEmail } from "./people.sql.server.ts";
+import { endSessionOf } from "./sessions.sql.server.ts";
 
 const now = new Date("2027-03-01T09:00:00Z");
 const later = (days: number) => new Date(now.getTime() + days * 86_400_000);

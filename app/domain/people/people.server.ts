@@ -1,9 +1,19 @@
 import { createHash } from "node:crypto";
 import type { Knex } from "knex";
+import type { LengthUnit } from "#app/core/lengths/parse-length.ts";
 import type { Actor } from "#app/domain/shop/actor.ts";
 import type { Role } from "#app/domain/shop/permissions.ts";
+import { insertShop } from "#app/domain/shop/shops.sql.server.ts";
 import { withTransaction } from "#app/services/db.server.ts";
-import { newId, newSecret } from "#app/services/ids.server.ts";
+import { newSecret } from "#app/services/ids.server.ts";
+import {
+  deleteInvitation,
+  markAccepted,
+  type OpenInvitation,
+  openInvitation,
+  putInvitation,
+} from "./invitations.sql.server.ts";
+import { addMember, isMember, lockOwners, membershipOf, removeMember, setRole } from "./people.sql.server.ts";
 
 const invitationMs = 14 * 86_400_000;
 
@@ -11,73 +21,49 @@ function tokenHash(token: string): string {
   return createHash("sha256").update(token).digest("hex");
 }
 
-/** Opens a shop; whoever opens it owns it. */
+/** Opens a shop; whoever opens it owns it. @returns the shop's id. */
 export async function openShop(
   db: Knex,
   personId: string,
-  shop: { name: string; units: "in" | "mm"; currency: string },
+  shop: { name: string; units: LengthUnit; currency: string },
 ): Promise<string> {
   return withTransaction(db, async (trx) => {
-    const id = newId();
-    await trx("shops").insert({ id, ...shop });
-    await trx("memberships").insert({ shop_id: id, person_id: personId, role: "owner" });
-    return id;
+    const shopId = await insertShop(trx, shop);
+    await addMember(trx, shopId, personId, "owner");
+    return shopId;
   });
 }
 
 export type Invited = { ok: true; token: string } | { ok: false; why: "member" };
 
-/** Asks somebody into the shop by their address. Asking again replaces the earlier invitation, whose link then opens nothing. */
+/**
+ * Asks somebody into the shop by their address. Asking again replaces the earlier invitation, whose link then opens nothing.
+ *
+ * @returns the secret of the link to mail; the table keeps its hash only.
+ */
 export async function invite(db: Knex, actor: Actor, email: string, role: Role, now: Date): Promise<Invited> {
   return withTransaction(db, async (trx) => {
-    const member = await trx("memberships as m")
-      .join("people as p", "p.id", "m.person_id")
-      .where({ "m.shop_id": actor.shopId, "p.email": email })
-      .first("p.id");
-    if (member) return { ok: false, why: "member" };
+    if (await isMember(trx, actor.shopId, email)) return { ok: false, why: "member" };
     const token = newSecret();
-    const fresh = {
-      role,
-      token_hash: tokenHash(token),
-      invited_by: actor.personId,
-      created_at: now,
-      expires_at: new Date(now.getTime() + invitationMs),
-      accepted_at: null,
-    };
-    await trx("invitations")
-      .insert({ id: newId(), shop_id: actor.shopId, email, ...fresh })
-      .onConflict(["shop_id", "email"])
-      .merge(fresh);
+    const expiresAt = new Date(now.getTime() + invitationMs);
+    await putInvitation(trx, actor, { email, role, tokenHash: tokenHash(token), now, expiresAt });
     return { ok: true, token };
   });
 }
 
 /** Takes an invitation back. False when it is not this shop's. */
-export async function revokeInvitation(db: Knex, actor: Actor, invitationId: string): Promise<boolean> {
-  return (
-    (await db("invitations").where({ id: invitationId, shop_id: actor.shopId }).whereNull("accepted_at").delete()) === 1
-  );
+export function revokeInvitation(db: Knex, actor: Actor, invitationId: string): Promise<boolean> {
+  return deleteInvitation(db, actor, { id: invitationId });
 }
 
-export interface OpenInvitation {
-  id: string;
-  shopId: string;
-  shopName: string;
-  email: string;
-  role: Role;
-  invitedBy: string;
+/** Takes back an invitation whose letter could not be sent. */
+export async function dropUnsentInvitation(db: Knex, actor: Actor, token: string): Promise<void> {
+  await deleteInvitation(db, actor, { token_hash: tokenHash(token) });
 }
 
 /** What a mailed invitation says, while it is good. */
-export async function findInvitation(db: Knex, token: string, now: Date): Promise<OpenInvitation | null> {
-  const row = await db("invitations as i")
-    .join("shops as s", "s.id", "i.shop_id")
-    .join("people as p", "p.id", "i.invited_by")
-    .where("i.token_hash", tokenHash(token))
-    .whereNull("i.accepted_at")
-    .where("i.expires_at", ">", now)
-    .first({ id: "i.id", shopId: "s.id", shopName: "s.name", email: "i.email", role: "i.role", invitedBy: "p.name" });
-  return row ?? null;
+export function findInvitation(db: Knex, token: string, now: Date): Promise<OpenInvitation | null> {
+  return openInvitation(db, tokenHash(token), now);
 }
 
 /** Accepts an invitation, once, by the person whose address it was mailed to. @returns the shop, or null. */
@@ -90,15 +76,8 @@ export async function acceptInvitation(
   return withTransaction(db, async (trx) => {
     const found = await findInvitation(trx, token, now);
     if (!found || found.email !== person.email) return null;
-    const accepted = await trx("invitations")
-      .where({ id: found.id })
-      .whereNull("accepted_at")
-      .update({ accepted_at: now });
-    if (accepted !== 1) return null;
-    await trx("memberships")
-      .insert({ shop_id: found.shopId, person_id: person.personId, role: found.role })
-      .onConflict(["shop_id", "person_id"])
-      .ignore();
+    if (!(await markAccepted(trx, found.id, now))) return null;
+    await addMember(trx, found.shopId, person.personId, found.role);
     return found.shopId;
   });
 }
@@ -108,16 +87,11 @@ export type MemberChange = { ok: true } | { ok: false; why: "missing" | "last ow
 /** Gives a member another role, or null to part ways. A shop keeps at least one owner; owners are locked while that is decided. */
 export async function changeMember(db: Knex, actor: Actor, personId: string, role: Role | null): Promise<MemberChange> {
   return withTransaction(db, async (trx) => {
-    const owners: { person_id: string }[] = await trx("memberships")
-      .where({ shop_id: actor.shopId, role: "owner" })
-      .forUpdate()
-      .select("person_id");
-    const at = { shop_id: actor.shopId, person_id: personId };
-    if (!(await trx("memberships").where(at).first("person_id"))) return { ok: false, why: "missing" };
-    if (role !== "owner" && owners.length === 1 && owners[0]?.person_id === personId)
-      return { ok: false, why: "last owner" };
-    if (role) await trx("memberships").where(at).update({ role });
-    else await trx("memberships").where(at).delete();
+    const owners = await lockOwners(trx, actor.shopId);
+    if (!(await membershipOf(trx, personId, actor.shopId))) return { ok: false, why: "missing" };
+    if (role !== "owner" && owners.length === 1 && owners[0] === personId) return { ok: false, why: "last owner" };
+    if (role) await setRole(trx, actor.shopId, personId, role);
+    else await removeMember(trx, actor.shopId, personId);
     return { ok: true };
   });
 }

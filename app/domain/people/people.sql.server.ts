@@ -15,6 +15,38 @@ export async function membershipOf(
   return row ?? null;
 }
 
+/** Brings a person into a shop. Whoever is in it already keeps the role they have. */
+export async function addMember(db: Knex, shopId: string, personId: string, role: Role): Promise<void> {
+  await db("memberships")
+    .insert({ shop_id: shopId, person_id: personId, role })
+    .onConflict(["shop_id", "person_id"])
+    .ignore();
+}
+
+/** Who owns a shop, locked: while one transaction decides about its owners, no other does. */
+export async function lockOwners(trx: Knex, shopId: string): Promise<string[]> {
+  return trx("memberships").where({ shop_id: shopId, role: "owner" }).forUpdate().pluck("person_id");
+}
+
+/** Gives a member another role. */
+export async function setRole(db: Knex, shopId: string, personId: string, role: Role): Promise<void> {
+  await db("memberships").where({ shop_id: shopId, person_id: personId }).update({ role });
+}
+
+/** Takes a member out of a shop. */
+export async function removeMember(db: Knex, shopId: string, personId: string): Promise<void> {
+  await db("memberships").where({ shop_id: shopId, person_id: personId }).delete();
+}
+
+/** Is somebody with this address in the shop? */
+export async function isMember(db: Knex, shopId: string, email: string): Promise<boolean> {
+  const row = await db("memberships as m")
+    .join("people as p", "p.id", "m.person_id")
+    .where({ "m.shop_id": shopId, "p.email": email })
+    .first("p.id");
+  return row !== undefined;
+}
+
 /** The person with this address, lower-cased, written down if new. Two first sign-ins at once give one person. */
 export async function personByEmail(db: Knex, email: string): Promise<string> {
   await db("people").insert({ id: newId(), email }).onConflict("email").ignore();
@@ -67,47 +99,4 @@ export async function listMembers(db: Knex, actor: Pick<Actor, "shopId">): Promi
     .where("m.shop_id", actor.shopId)
     .orderByRaw("FIELD(m.role, 'owner', 'maker', 'helper'), p.name, p.email")
     .select({ personId: "p.id", name: "p.name", email: "p.email", role: "m.role", joinedAt: "m.created_at" });
-}
-
-export interface Invitation {
-  id: string;
-  email: string;
-  role: Role;
-  expiresAt: Date;
-}
-
-/** Invitations not yet accepted nor out of date. */
-export async function listInvitations(db: Knex, actor: Pick<Actor, "shopId">, now: Date): Promise<Invitation[]> {
-  return db("invitations")
-    .where({ shop_id: actor.shopId })
-    .whereNull("accepted_at")
-    .where("expires_at", ">", now)
-    .orderBy("email")
-    .select({ id: "id", email: "email", role: "role", expiresAt: "expires_at" });
-}
-
-export interface OwnSession {
-  id: string;
-  userAgent: string;
-  createdAt: Date;
-  lastSeenAt: Date;
-}
-
-/** Where somebody is signed in, newest use first. */
-export async function sessionsOf(db: Knex, personId: string, now: Date): Promise<OwnSession[]> {
-  return db("sessions")
-    .where({ person_id: personId })
-    .where("expires_at", ">", now)
-    .orderBy("last_seen_at", "desc")
-    .select({ id: "id", userAgent: "user_agent", createdAt: "created_at", lastSeenAt: "last_seen_at" });
-}
-
-/** Ends one of a person's own sessions; a stranger's is left alone. */
-export async function endSessionOf(db: Knex, personId: string, sessionId: string): Promise<boolean> {
-  return (await db("sessions").where({ id: sessionId, person_id: personId }).delete()) === 1;
-}
-
-/** Ends all of a person's sessions but one. */
-export async function endOtherSessions(db: Knex, personId: string, keepId: string): Promise<number> {
-  return db("sessions").where({ person_id: personId }).whereNot({ id: keepId }).delete();
 }

@@ -1,4 +1,6 @@
 import type { Knex } from "knex";
+import type { LengthUnit } from "#app/core/lengths/parse-length.ts";
+import { newId } from "#app/services/ids.server.ts";
 import type { ShopForm } from "./shop.schema.ts";
 import type { ShopSettings } from "./shop.ts";
 
@@ -30,6 +32,16 @@ const columns = {
   labelSheet: "label_sheet",
   version: "version",
 } as const;
+
+/** Writes down a new shop, with the table's own settings for all that is not given. @returns its id. */
+export async function insertShop(
+  db: Knex,
+  shop: { name: string; units: LengthUnit; currency: string },
+): Promise<string> {
+  const id = newId();
+  await db("shops").insert({ id, ...shop });
+  return id;
+}
 
 /** A shop's settings, or null. */
 export async function getShop(db: Knex, shopId: string): Promise<ShopSettings | null> {

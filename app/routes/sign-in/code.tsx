@@ -21,18 +21,25 @@ export async function loader({ request }: Route.LoaderArgs) {
 }
 
 const wrong = "That code is not right, or it is used up. Look at the newest letter; after five tries ask for another.";
+const tooMany = {
+  place: "Too many codes were tried from here. Open the link in the letter, or wait a quarter of an hour.",
+  address: "Too many codes were tried for this address today. Open the link in the letter instead.",
+};
 
 export async function action({ request, context }: Route.ActionArgs) {
   const db = context.get(dbContext);
   const now = systemClock.now();
   const submission = parseWithZod(await request.formData(), { schema: codeForm });
   if (submission.status !== "success") return data({ result: submission.reply() }, { status: 400 });
-  const refuse = () => data({ result: submission.reply({ fieldErrors: { code: [wrong] } }) }, { status: 400 });
+  const refuse = (why: string, status: number) =>
+    data({ result: submission.reply({ fieldErrors: { code: [why] } }) }, { status });
   const pending = await readPending(request);
-  if (!pending || !(await mayGuess(db, request, now)) || !(await countAttempt(db, pending.challengeId, now)))
-    return refuse();
+  if (!pending) return refuse(wrong, 400);
+  const may = await mayGuess(db, request, pending.email, now);
+  if (may !== "yes") return refuse(tooMany[may], 429);
+  if (!(await countAttempt(db, pending.challengeId, now))) return refuse(wrong, 400);
   const answer = await judgeCode({ db, mailer: context.get(mailerContext), now }, request, submission.value.code);
-  return answer.headers.get("Location")?.startsWith("/sign-in/code") ? refuse() : answer;
+  return answer.headers.get("Location")?.startsWith("/sign-in/code") ? refuse(wrong, 400) : answer;
 }
 
 export default function TypeCode({ loaderData, actionData }: Route.ComponentProps) {

@@ -8,6 +8,7 @@ import { type FreshDatabase, freshDatabase, useTestDb } from "#tests/setup/test-
 import { action as typeCode } from "./code.tsx";
 import { loader as lookAtLink, action as openLink } from "./link.tsx";
 import { action as askForCode } from "./sign-in.tsx";
+import { action as signOut } from "./sign-out.ts";
 
 const base = "http://rack.example";
 
@@ -15,8 +16,10 @@ const base = "http://rack.example";
 function browser(db: Knex, address = "203.0.113.7") {
   const { context, letters } = strangerContext(db);
   const cookies = new Map<string, string>();
-  function request(path: string, body?: Record<string, string>): Request {
+  function request(path: string, body?: Record<string, string>, said: Record<string, string> = {}): Request {
     const headers = {
+      Host: "rack.example",
+      ...said,
       Cookie: [...cookies].map(([name, value]) => `${name}=${value}`).join("; "),
       "X-Client-Address": address,
     };
@@ -31,8 +34,8 @@ function browser(db: Knex, address = "203.0.113.7") {
     }
     return answer;
   }
-  const run = async (handler: unknown, path: string, body?: Record<string, string>) => {
-    const made = request(path, body);
+  const run = async (handler: unknown, path: string, body?: Record<string, string>, said?: Record<string, string>) => {
+    const made = request(path, body, said);
     const args = { request: made, context, params: {}, url: new URL(made.url), pattern: "" };
     try {
       return keep(await (handler as (args: unknown) => unknown)(args));
@@ -163,6 +166,63 @@ describe("signing in by a mailed code", () => {
     ];
     expect(new Set(answers.map((answer) => `${answer.status} ${answer.headers.get("Location")}`)).size).toBe(1);
     expect(known.letters.length).toBe(unknown.letters.length);
+  });
+
+  test("fifty codes a day are tried for one address, however many letters; its link works all the same", async () => {
+    const statuses: number[] = [];
+    let newest = browser(db());
+    for (let letter = 0; letter < 11; letter++) {
+      newest = browser(db(), `198.51.100.${letter}`);
+      await db()("rate_limits").where("bucket", "like", "code to%").delete();
+      await newest.ask("ana@shop.example");
+      for (let i = 0; i < 5; i++) statuses.push(statusOf(await newest.type(wrongCode(newest.newestCode()))));
+    }
+    expect(statuses.filter((status) => status === 400)).toHaveLength(50);
+    expect(statuses.slice(50)).toEqual([429, 429, 429, 429, 429]);
+    expect(statusOf(await newest.type(newest.newestCode()))).toBe(429);
+    const form = { t: newest.newestLink().searchParams.get("t") ?? "" };
+    expect(statusOf(await newest.run(openLink, "/sign-in/link", form))).toBe(302);
+  });
+
+  test("sixty codes are tried from one place, however many addresses", async () => {
+    const statuses: number[] = [];
+    for (let person = 0; person < 13; person++) {
+      const guesser = browser(db(), `2001:db8:1:2::${person}`);
+      await guesser.ask(`person${person}@shop.example`);
+      for (let i = 0; i < 5; i++) statuses.push(statusOf(await guesser.type(wrongCode(guesser.newestCode()))));
+    }
+    expect(statuses.filter((status) => status === 400)).toHaveLength(60);
+    expect(statuses.slice(60)).toEqual([429, 429, 429, 429, 429]);
+  });
+
+  test("a place that asks for too many letters does not use up what an address may be sent", async () => {
+    const spammer = browser(db());
+    for (let i = 0; i < 30; i++) await spammer.ask(`person${i}@shop.example`);
+    for (let i = 0; i < 10; i++) await spammer.ask("ana@shop.example");
+    const ana = browser(db(), "198.51.100.9");
+    await ana.ask("ana@shop.example");
+    expect(ana.letters).toHaveLength(1);
+  });
+
+  test("where to go after is left out when it is too long to keep, instead of shutting anybody out", async () => {
+    const ana = browser(db());
+    expect(statusOf(await ana.ask("ana@shop.example", `/boards?q=${"x".repeat(2100)}`))).toBe(302);
+    const answer = (await ana.type(ana.newestCode())) as Response;
+    expect(answer.headers.get("Location")).toBe("/");
+  });
+
+  test.each([
+    [undefined, 302],
+    [base, 302],
+    ["https://evil.example", 403],
+    ["null", 403],
+  ])("signing out from a page of %s is answered %s", async (origin, status) => {
+    const ana = browser(db());
+    await ana.ask("ana@shop.example");
+    await ana.type(ana.newestCode());
+    const answer = await ana.run(signOut, "/sign-out", {}, origin ? { Origin: origin } : {});
+    expect(statusOf(answer)).toBe(status);
+    expect((await ana.visit()) === null).toBe(status === 302);
   });
 
   test("a letter that cannot be sent is said, and nobody waits for it", async () => {

@@ -55,6 +55,7 @@ export default [
       index("routes/projects/list.tsx"),
       route("new", "routes/projects/new.tsx"),
       route(":projectId/plan", "routes/projects/plan.tsx"),
+      route(":projectId/take-down", "routes/projects/take-down.tsx"),
       route(":projectId", "routes/projects/project.tsx", [
         route("change", "routes/projects/change.tsx"),
         route("parts", "routes/projects/parts.tsx"),
@@ -71,6 +72,9 @@ export default [
       route("ready", "routes/calculators/ready.tsx"),
       route("movement", "routes/calculators/movement.tsx"),
       route("weight", "routes/calculators/weight.tsx"),
+      route("grade", "routes/calculators/grade.tsx"),
+      route("glue-up", "routes/calculators/glue-up.tsx"),
+      route("milling", "routes/calculators/milling.tsx"),
     ]),
     ...prefix("files", [
       route("boards.csv", "routes/files/boards-csv.ts"),

@@ -69,6 +69,27 @@ const drawings: Record<CalculatorName, ReactNode> = {
       ))}
     </>
   ),
+  grade: (
+    <>
+      <rect x="4" y="20" width="88" height="40" fill={wood} stroke={edge} />
+      <ellipse cx="52" cy="38" rx="5" ry="4" fill={edge} />
+      <path d="M7 23H44V57H7ZM60 23H89V57H60Z" stroke={crayon} {...line} />
+    </>
+  ),
+  glueUp: (
+    <>
+      <rect x="14" y="22" width="68" height="17" fill={wood} stroke={edge} />
+      <rect x="14" y="41" width="68" height="17" fill={wood} stroke={edge} />
+      <path d="M28 8V20M68 8V20M28 72V60M68 72V60" stroke="currentColor" {...line} />
+    </>
+  ),
+  milling: (
+    <>
+      <rect x="10" y="12" width="76" height="56" fill="none" stroke={edge} strokeDasharray="5 4" />
+      <rect x="18" y="20" width="60" height="40" fill="none" stroke={edge} strokeDasharray="5 4" />
+      <rect x="26" y="27" width="44" height="26" fill={wood} stroke={edge} />
+    </>
+  ),
 };
 
 export function CalculatorDrawing({ name }: { name: CalculatorName }) {

@@ -52,6 +52,21 @@ export const calculators = {
     title: "Weight",
     lead: "A board, a stack, and what each arm of the rack bears.",
   },
+  grade: {
+    path: "/calculators/grade",
+    title: "Grade helper",
+    lead: "Which grades a board's clear cuttings could make.",
+  },
+  glueUp: {
+    path: "/calculators/glue-up",
+    title: "Plies and glue-up",
+    lead: "How many plies, where the glue line lies, how many clamps, how much glue.",
+  },
+  milling: {
+    path: "/calculators/milling",
+    title: "Milling steps",
+    lead: "The size at each step from rough to finished, and the cautions it calls for.",
+  },
 } as const satisfies Record<string, Calculator>;
 
 export type CalculatorName = keyof typeof calculators;

@@ -6,9 +6,12 @@ import { aShopLike } from "#app/domain/calculators/shop.fixture.ts";
 import { atWorkContext } from "#app/server/context.server.ts";
 import { loader as air } from "./air.tsx";
 import { loader as claim } from "./claim.tsx";
+import { loader as glueUp } from "./glue-up.tsx";
+import { loader as grade } from "./grade.tsx";
 import { loader as leg } from "./leg.tsx";
 import { loader as measure } from "./measure.tsx";
 import { loader as meter } from "./meter.tsx";
+import { loader as milling } from "./milling.tsx";
 import { loader as movement } from "./movement.tsx";
 import { loader as ready } from "./ready.tsx";
 import { loader as rings } from "./rings.tsx";
@@ -21,7 +24,7 @@ interface Loaded {
   refused: string | null;
 }
 
-const loaders = { air, claim, leg, measure, meter, movement, ready, rings, weight };
+const loaders = { air, claim, "glue-up": glueUp, grade, leg, measure, meter, milling, movement, ready, rings, weight };
 
 function load(loader: unknown, units: "in" | "mm", given: Record<string, string> = {}): Loaded {
   const context = new RouterContextProvider();

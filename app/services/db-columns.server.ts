@@ -7,7 +7,7 @@ interface Column {
 
 /**
  * How a column of MariaDB becomes a value: DECIMAL a number, BIGINT (COUNT too) a number where exact and else a bigint,
- * TINYINT(1) a boolean, DATE "YYYY-MM-DD". The rest as the driver does it; JSON stays text, for the one file that names the table to parse.
+ * TINYINT(1) a boolean, DATE "YYYY-MM-DD". The rest as the driver does it; JSON arrives parsed from a server that says which columns are JSON, else as text.
  */
 export function castColumn(column: Column, asDriver: () => unknown): unknown {
   switch (column.type) {

@@ -2,7 +2,7 @@ import type { EndColours } from "#app/core/endgrain/clear-wood.ts";
 import { endColours } from "#app/core/endgrain/contrast.ts";
 import type { EndCorners } from "#app/core/endgrain/corner-check.ts";
 import { channelsOf, type EndPixels } from "#app/core/endgrain/pixels.ts";
-import { shrunk } from "#app/core/endgrain/resample.ts";
+import { shrunkPixels } from "#app/core/endgrain/resample.ts";
 
 /** Pixels of the picture that is worked on. On the development photographs 50 000 to 400 000 read the same to a twentieth of a degree. */
 export const WORKING_AREA_PX = 100_000;
@@ -27,18 +27,13 @@ export function straightened(
   const [a, , c] = corners;
   const whole = a.x === 0 && a.y === 0 && c.x === pixels.width && c.y === pixels.height;
   if (whole && size.width <= pixels.width && size.height <= pixels.height) {
-    const full = endColours(pixels);
-    return {
-      light: shrunk(full.light, size.width, size.height),
-      redness: full.redness && shrunk(full.redness, size.width, size.height),
-      yellowness: full.yellowness && shrunk(full.yellowness, size.width, size.height),
-    };
+    return endColours(shrunkPixels(pixels, size.width, size.height));
   }
   return endColours(resampled(pixels, corners, size));
 }
 
-/** Mapping of the unit square onto four corners, as coefficients of (ax+by+c)/(gx+hy+1) (P. Heckbert, Fundamentals of texture mapping, 1989). */
-function squareToCorners([p0, p1, p2, p3]: EndCorners): number[] {
+/** Mapping of the unit square onto four corners, as a…h of (ax+by+c)/(gx+hy+1) (P. Heckbert, Fundamentals of texture mapping, 1989). */
+export function squareToCorners([p0, p1, p2, p3]: EndCorners): number[] {
   const sx = p0.x - p1.x + p2.x - p3.x;
   const sy = p0.y - p1.y + p2.y - p3.y;
   const dx1 = p1.x - p2.x;

@@ -9,7 +9,7 @@ const block = 2_000;
 export async function reclassBoards(trx: Knex, actor: Pick<Actor, "shopId">, limits: ClassLimits): Promise<void> {
   let after = "";
   for (;;) {
-    const rows: { id: string; ring_class: RingClass; ring_field: string }[] = await trx("boards")
+    const rows: { id: string; ring_class: RingClass; ring_field: RingField | string }[] = await trx("boards")
       .where({ shop_id: actor.shopId })
       .whereNotNull("ring_field")
       .where("id", ">", after)
@@ -20,10 +20,15 @@ export async function reclassBoards(trx: Knex, actor: Pick<Actor, "shopId">, lim
     after = rows.at(-1)?.id ?? "";
     const moved = new Map<RingClass, string[]>();
     for (const row of rows) {
-      const ringClass = dominantClass(JSON.parse(row.ring_field) as RingField, limits);
+      const ringClass = dominantClass(fieldOf(row.ring_field), limits);
       if (ringClass !== row.ring_class) moved.set(ringClass, [...(moved.get(ringClass) ?? []), row.id]);
     }
     for (const [ringClass, ids] of moved)
       await trx("boards").where({ shop_id: actor.shopId }).whereIn("id", ids).update({ ring_class: ringClass });
   }
+}
+
+/** Parsed by the driver where the server says which columns are JSON; an older server sends text. */
+function fieldOf(column: RingField | string): RingField {
+  return typeof column === "string" ? JSON.parse(column) : column;
 }
